@@ -1,0 +1,19 @@
+import { defineConfig } from 'vitest/config';
+import react from '@vitejs/plugin-react';
+
+// The page's own root is src/page, so that the top level of the repository holds no HTML of its own.
+export default defineConfig({
+  root: 'src/page',
+  base: './',
+  plugins: [react()],
+  build: { outDir: '../../dist', emptyOutDir: true, target: 'es2022' },
+  worker: { format: 'es' },
+  server: { fs: { allow: ['../..'] } },
+  test: {
+    root: '.',
+    environment: 'node',
+    include: ['tests/**/*.test.ts'],
+    exclude: ['node_modules/**', 'dist/**'],
+    testTimeout: 60_000,
+  },
+});
