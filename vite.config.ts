@@ -1,16 +1,17 @@
 import { defineConfig } from 'vitest/config';
+import { resolve } from 'node:path';
 import react from '@vitejs/plugin-react';
 
 // The page's own root is src/page, so that the top level of the repository holds no HTML of its own.
 export default defineConfig({
-  root: 'src/page',
+  root: resolve(import.meta.dirname, 'src/page'),
   base: './',
   plugins: [react()],
   build: { outDir: '../../dist', emptyOutDir: true, target: 'es2022' },
   worker: { format: 'es' },
   server: { fs: { allow: ['../..'] } },
   test: {
-    root: '.',
+    root: import.meta.dirname,
     environment: 'node',
     include: ['tests/**/*.test.ts'],
     exclude: ['node_modules/**', 'dist/**'],
