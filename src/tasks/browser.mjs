@@ -82,7 +82,10 @@ export const ensureBrowser = async () => {
 
   if (isRootOnDebian()) {
     console.log('That gave none. Installing Debian’s package …');
-    if ((await run(['apt-get', 'update'])) === 0) await run(['apt-get', 'install', '-y', 'chromium']);
+    const quietly = { env: { ...process.env, DEBIAN_FRONTEND: 'noninteractive' } };
+    if ((await run(['apt-get', 'update'], quietly)) === 0) {
+      await run(['apt-get', 'install', '-y', 'chromium'], quietly);
+    }
     const systems = await findBrowser();
     if (systems !== undefined) return systems;
   }
