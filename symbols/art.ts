@@ -9,6 +9,9 @@ export type PathCommand =
   | readonly ['C', number, number, number, number, number, number]
   | readonly ['Z'];
 
+/** Marks that are read like a letter, so they stay upright however the symbol is turned. */
+export type UprightMark = 'plus' | 'minus' | 'sine' | 'letter-m' | 'step';
+
 export type SymbolShape =
   | {
       readonly shape: 'path';
@@ -24,7 +27,7 @@ export type SymbolShape =
       readonly fill: 'none' | 'paper' | 'ink';
     }
   /** A short upright mark inside a body (plus, minus): never turned or mirrored with the symbol, only moved. */
-  | { readonly shape: 'upright'; readonly mark: 'plus' | 'minus'; readonly x: number; readonly y: number };
+  | { readonly shape: 'upright'; readonly mark: UprightMark; readonly x: number; readonly y: number };
 
 export interface Box {
   readonly left: number;
@@ -37,6 +40,8 @@ export interface SymbolArt {
   /** Pin name to its offset in grid units. Order is the order of pins in the stage file's table. */
   readonly pins: Readonly<Record<string, readonly [number, number]>>;
   readonly shapes: readonly SymbolShape[];
+  /** Strokes drawn only where the pin of that name carries a wire: an amplifier's supplies. */
+  readonly whenWired?: Readonly<Record<string, readonly SymbolShape[]>>;
   /** What wires and texts keep clear of, leads left out, pixels. */
   readonly body: Box;
 }

@@ -1,0 +1,3 @@
+import { bipolarArt } from './bipolarArt.ts';
+
+export const bipolarNpn = bipolarArt('n-p-n');

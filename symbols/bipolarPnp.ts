@@ -1,0 +1,3 @@
+import { bipolarArt } from './bipolarArt.ts';
+
+export const bipolarPnp = bipolarArt('p-n-p');

@@ -1,0 +1,3 @@
+import { mosfetArt } from './mosfetArt.ts';
+
+export const mosfetN = mosfetArt('n', 'discrete');

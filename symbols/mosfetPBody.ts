@@ -1,0 +1,3 @@
+import { mosfetArt } from './mosfetArt.ts';
+
+export const mosfetPBody = mosfetArt('p', 'body');

@@ -1,0 +1,3 @@
+import { switchArt } from './switchArt.ts';
+
+export const switchOpen = switchArt(false);
