@@ -2,12 +2,12 @@
  * The interface of a part kind. One file in this folder describes one kind entirely: what it is called, how it is
  * drawn, what a person may state of it, what it is to the solver, and what is read off it. The catalogue lists them.
  *
- * SI units; temperatures in °C up to the elements, which take kelvin.
+ * SI units. Temperature is no part's business: the solver is told the temperature of each element, in kelvin.
  */
 import type { z } from 'zod';
 import type { Element } from '../../solver/circuit.ts';
 import type { SymbolArt } from '../../symbols/art.ts';
-import type { Result } from '../values/result.ts';
+import type { Fault, Result } from '../values/result.ts';
 import type { Device, DeviceType } from './devices/device.ts';
 import type { Field } from './field.ts';
 import type { PartReadout } from './readout.ts';
@@ -51,25 +51,19 @@ export interface Draw {
 /** What a kind needs in order to become elements. */
 export interface ElectricalContext extends PartContext {
   readonly law: Law;
-  /** °C. */
-  readonly ambient: number;
-  /** The part's own temperature, °C: `ambient` unless it heats itself. */
-  readonly temperature: number;
   /** A number for every key of `draws`. */
   readonly figures: Figures;
-  /** The node of a pin. Unwired pins have a node of their own (a mosfet's unwired body is never asked for). */
+  /** The node of a pin. Every pin of `pins` has one, wired or not. */
   readonly node: (pin: string) => number;
-  /** A node inside the part, one for each of `innerNodes`. */
-  readonly inner: (name: string) => number;
 }
 
 /** What a kind needs in order to be read. */
 export interface ReadingContext extends ElectricalContext {
-  /** Solved voltage of a pin (or of an inner node) against the reference, V. */
+  /** Solved voltage of a pin against the reference, V. */
   readonly volts: (pin: string) => number;
   /** Current into terminal `terminal` of the element at index `element` of `elements(context)`, A. */
   readonly amps: (element: number, terminal: number) => number;
-  /** The operating values of that element, as its law gives them. */
+  /** The operating values of that element, as its law's `read` gives them. */
   readonly operating: (element: number) => unknown;
 }
 
@@ -92,18 +86,26 @@ export interface PartKind {
   readonly family: Family;
   /** At least one. */
   readonly variants: readonly Variant[];
-  /** Whether a part of this kind must carry a name of its own (`own`), may share one (`shared`), or needs none. */
-  readonly naming: 'own' | 'shared' | 'none';
+  /** Whether a part of this kind must have a name. */
+  readonly nameNeeded: boolean;
+  /** Whether several parts of this kind may bear one name. */
+  readonly nameShared: boolean;
   /** Device types a part of this kind may name; none where it takes no device. */
   readonly deviceTypes: readonly DeviceType[];
   /** Whether a part of this kind can carry a duty. */
   readonly takesDuty: boolean;
-  /** Whether the part pins its node(s) to the reference or joins nodes by name rather than by wire. */
-  readonly joins: 'none' | 'reference' | 'label' | 'name';
-  /** Strict schema of `values`, exactly page 4's keys. A schema that accepts `{}` makes `values` optional. */
-  readonly values: z.ZodType<Values>;
+  /** How the part makes a node beyond its wires: it is the reference, or is one with all of its name or its label. */
+  readonly joins: 'nothing' | 'reference' | 'name' | 'label';
+  /** Strict schema of `values`. Where it accepts `{}`, `values` may be left out. */
+  readonly values: z.ZodObject;
   /** The same values for forms, in order. */
   readonly fields: readonly Field[];
+
+  /**
+   * What is wrong between values, device and pins, beyond the schema: a width left out where the device needs one.
+   * Paths are relative to the part: `values.width`.
+   */
+  check(context: PartContext): readonly Fault[];
 
   /** Letters of the reference designator (IEEE Std 315-1975, section 22). */
   designator(context: PartContext): string;
@@ -121,8 +123,6 @@ export interface PartKind {
   /** What is assumed about the part because nobody stated it, in sentences. */
   assumptions(context: PartContext, law: Law): readonly string[];
 
-  /** Names of the nodes inside the part. Fixed for a fixed structure. */
-  innerNodes(context: PartContext): readonly string[];
   /**
    * The part as solver elements. Number, order, laws and nodes are the same for the same values-as-structure (pins
    * wired, switch closed, level of an output, device); other figures only change `Element.values`.
