@@ -1,4 +1,5 @@
 import { parseValue } from './parse.ts';
+import { wordsOf } from './quantities.ts';
 import type { QuantityName } from './quantities.ts';
 import { describeFound } from './found.ts';
 import { failure, success } from './result.ts';
@@ -12,7 +13,7 @@ export function checkPlain(value: unknown, quantity: QuantityName): Result<numbe
   if (typeof value !== 'number' && typeof value !== 'string') {
     return failure({
       code: 'wrong-type',
-      message: `A ${quantity} is a number or text such as "4.7 m".`,
+      message: `A value of ${wordsOf(quantity)} is a number, or text such as "4.7 m".`,
       found: describeFound(value),
       allowed: 'a number in SI base units, or text',
     });

@@ -3,7 +3,7 @@ import { describeFound, shorten } from './found.ts';
 import { formatRange } from './format.ts';
 import { readMarkingCode } from './marking-code.ts';
 import { prefixExponents } from './prefixes.ts';
-import { quantityOf } from './quantities.ts';
+import { quantityOf, wordsOf } from './quantities.ts';
 import type { Quantity, QuantityName } from './quantities.ts';
 import { failure, success } from './result.ts';
 import type { Result } from './result.ts';
@@ -31,7 +31,7 @@ export function parseValue(value: number | string, quantity: QuantityName, limit
   if (!Number.isFinite(number.value)) {
     return failure({
       code: 'not-finite',
-      message: `A ${quantity} must be a finite number.`,
+      message: `The value of ${wordsOf(quantity)} must be a finite number.`,
       found: describeFound(value),
       allowed: formatRange(low, high, what),
     });
@@ -40,7 +40,7 @@ export function parseValue(value: number | string, quantity: QuantityName, limit
     const allowed = formatRange(low, high, what);
     return failure({
       code: 'out-of-range',
-      message: `This ${quantity} is outside what is allowed: ${allowed}.`,
+      message: `This value of ${wordsOf(quantity)} is outside what is allowed: ${allowed}.`,
       found: describeFound(value),
       allowed,
     });
@@ -53,9 +53,12 @@ function readText(text: string, name: QuantityName, quantity: Quantity): Result<
   const refuse = (code: string, message: string) =>
     failure({ code, message, found: describeFound(text), allowed: allowedText(quantity) });
 
-  if (trimmed === '') return refuse('not-a-value', `A ${name} is missing here.`);
+  if (trimmed === '') return refuse('not-a-value', `A value of ${wordsOf(name)} is missing here.`);
   if (trimmed.length > longestText) {
-    return refuse('not-a-value', `This text is too long for a ${name}: at most ${longestText} characters.`);
+    return refuse(
+      'not-a-value',
+      `This text is too long for ${wordsOf(name)}: at most ${longestText} characters.`,
+    );
   }
   if (/\d\s*,\s*\d/.test(trimmed)) {
     return refuse('decimal-comma', 'Write the decimal sign as a point: 4.7, not 4,7.');
@@ -63,7 +66,7 @@ function readText(text: string, name: QuantityName, quantity: Quantity): Result<
   const direct = readDirectly(trimmed, quantity);
   if (direct !== undefined) return success(direct);
   if (looksLikeArithmetic(trimmed) && !onlyAUnitIsWrong(trimmed)) return evaluateArithmetic(trimmed);
-  return refuse('not-a-value', explain(trimmed, name, quantity));
+  return refuse(...explain(trimmed, name, quantity));
 }
 
 /** Text that is neither arithmetic nor wrong: a number with prefix and unit, or a marking code. */
@@ -129,23 +132,29 @@ function allowedText(quantity: Quantity): string {
 const exampleCode = { resistance: '4k7', capacitance: '4n7' } as const;
 
 /** Says what is wrong with text that is no value, with the hint that fits. */
-function explain(text: string, name: QuantityName, quantity: Quantity): string {
+function explain(
+  text: string,
+  name: QuantityName,
+  quantity: Quantity,
+): readonly [code: string, message: string] {
   const said = `"${shorten(text)}"`;
+  const what = wordsOf(name);
   const rest = text.replace(numberPattern, '').trim();
-  const numeric = numberPattern.test(text);
-  if (numeric && quantity.code === 'resistance' && /^\d*m\d+/.test(text.replace(/^\d+/, ''))) {
-    return `${said} is no resistance: m is milli and M is mega; 2M2 is 2.2 MΩ.`;
+  if (!numberPattern.test(text) || rest === '') return ['not-a-value', `${said} is not a value of ${what}.`];
+  if (quantity.code === 'resistance' && /^m\d+$/.test(rest)) {
+    return ['not-a-value', `${said} is not a resistance: m is milli and M is mega; 2M2 is 2.2 MΩ.`];
   }
-  if (numeric && rest.startsWith('K')) return `${said} is not understood: kilo is a small k.`;
-  if (numeric && /^\p{L}\d+$/u.test(rest)) {
-    return `${said} is no ${name}: write it with a decimal point and its unit${inBrackets(quantity)}.`;
+  if (rest.startsWith('K')) return ['not-a-value', `${said} is not understood: kilo is a small k.`];
+  if (/^\p{L}\d+$/u.test(rest)) {
+    const unit = quantity.unit === '' ? '' : ` and its unit, ${quantity.unit}`;
+    return ['not-a-value', `${said} is not a code for ${what}: write it with a decimal point${unit}.`];
   }
-  if (numeric && rest !== '') {
-    return quantity.unit === ''
-      ? `"${shorten(rest)}" is no unit of a ${name}, which is a pure number.`
-      : `"${shorten(rest)}" is not the unit of a ${name}: its unit is ${quantity.unit}.`;
-  }
-  return `${said} is no ${name}.`;
+  if (/^\d/.test(rest))
+    return ['not-a-value', `${said} is not one number: write it without spaces or marks.`];
+  return [
+    'wrong-unit',
+    quantity.unit === ''
+      ? `"${shorten(rest)}" is not understood: ${what} is a pure number.`
+      : `"${shorten(rest)}" is not a unit of ${what}: its unit is ${quantity.unit}.`,
+  ];
 }
-
-const inBrackets = (quantity: Quantity) => (quantity.unit === '' ? '' : ` (${quantity.unit})`);

@@ -88,3 +88,7 @@ export type QuantityName = keyof typeof quantities;
 
 /** The quantity of that name, in its general shape. */
 export const quantityOf = (name: QuantityName): Quantity => quantities[name];
+
+/** The name in plain words: `gainFactor` is "gain factor". */
+export const wordsOf = (name: QuantityName): string =>
+  name.replace(/[A-Z]/g, (capital) => ` ${capital.toLowerCase()}`);

@@ -24,7 +24,8 @@ export function formatStated(spec: ValueSpec, quantity: QuantityName): string {
   const unit = quantityOf(quantity).unit;
   if (typeof stated === 'string' && !isArithmetic(stated, quantity)) {
     const typed = stated.trim();
-    return /^[+\-\u2212]?[\d.]+$/.test(typed) && unit !== '' ? `${typed} ${unit}` : typed;
+    const bareNumber = /^[+\-\u2212]?[\d.]+$/.test(typed);
+    return bareNumber && unit !== '' ? withTrueMinus(`${typed} ${unit}`) : typed;
   }
   return formatCoded(resolveValue(spec, quantity).nominal, quantity);
 }
