@@ -78,9 +78,7 @@ export interface BipolarReading extends PartReadingBase, DutyReading {
 }
 
 /** Kinds with their own figures (amplifier, potentiometer, …) add named ones. */
-export interface OtherReading extends PartReadingBase {
-  readonly [figure: string]: string | boolean | Figure | undefined;
-}
+export type OtherReading = PartReadingBase & Readonly<Record<string, string | boolean | Figure | undefined>>;
 
 export type PartReading = TwoPinReading | MosfetReading | BipolarReading | OtherReading;
 
