@@ -47,7 +47,7 @@ export const helpText = (verb: VerbSpec | null): string => {
     ].join('\n');
   }
   return [
-    `${verb.name}: ${verb.gives}`,
+    ...wrapped(`${verb.name}: ${verb.gives}`, 80),
     ...(verb.built ? [] : ['Not in this version.']),
     '',
     `  ${command} ${verb.name} FILE${verb.built ? ' [options]' : ''}`,
