@@ -1,6 +1,19 @@
 /** Solves A·x = b again and again for matrices of one pattern. */
+import { createAcceptedSolve, type SolveOperations } from './acceptedSolve.ts';
+import {
+  backwardError,
+  equationsOf,
+  isWithin,
+  transposedEquationsOf,
+  type Equations,
+} from './backwardError.ts';
+import { determinantSign, logDeterminant } from './determinantSign.ts';
+import { factor } from './factor.ts';
+import { createFactorisation, type Factorisation } from './factorisation.ts';
+import { eliminationOrder } from './order.ts';
 import type { SparsePattern } from './pattern.ts';
-import { factored, solved, type FactorStatus, type SolveStatus } from './status.ts';
+import { sound } from './refactor.ts';
+import { factored, refactored, type FactorStatus, type SolveStatus } from './status.ts';
 
 export type { FactorStatus, SolveStatus } from './status.ts';
 
@@ -15,7 +28,8 @@ export interface LinearSystem {
   factorise(): FactorStatus;
   /**
    * Solves A·x = b in place with the last factors. `b` has `size` places, or one more for the reference node,
-   * which is left alone. `values` must still be those factorised. Throws when no factors stand.
+   * which is left alone. `values` must still be those factorised. Where the backward error exceeds 1e-12, pivots
+   * are chosen anew and the answer refined. Throws when no factors stand.
    */
   solve(b: Float64Array): SolveStatus;
   /** Solves Aᵀ·x = b, likewise. */
@@ -26,102 +40,80 @@ export interface LinearSystem {
   logDeterminant(): number;
 }
 
-/** A plain dense elimination with partial pivoting stands here until the sparse one is in. */
+/** The column order is found here, once; after the first factorisation the steady state allocates nothing. */
 export function createLinearSystem(pattern: SparsePattern): LinearSystem {
-  const { size, entryCount, columnStart, rowIndex } = pattern;
-  const values = new Float64Array(entryCount + 1);
-  const lu = new Float64Array(size * size);
-  const order = new Int32Array(size);
+  const { size } = pattern;
+  const values = new Float64Array(pattern.entryCount + 1);
+  const order = eliminationOrder(pattern);
+  const given = new Float64Array(size);
+  const answer = new Float64Array(size);
   const work = new Float64Array(size);
-  let state: 'none' | 'singular' | 'ready' = 'none';
-  let sign: -1 | 1 = 1;
+  let factors: Factorisation | undefined;
+  let state: 'unfactorised' | 'ready' | 'singular' = 'unfactorised';
+  let pivotsAreFresh = false;
 
-  const check = (b: Float64Array) => {
+  const chooseAnew = (): FactorStatus => {
+    state = 'singular';
+    const places = factor(pattern, order, values);
+    if ('kind' in places) return places;
+    factors = createFactorisation(places);
+    const objection = factors.refactor(values);
+    if (objection !== sound) return { kind: 'singular', column: places.columns[objection]! };
+    pivotsAreFresh = true;
+    state = 'ready';
+    return factored;
+  };
+
+  const operations = (equations: Equations, transposed: boolean): SolveOperations => ({
+    apply(right, solution) {
+      const { places } = factors!;
+      const from = transposed ? places.columns : places.rows;
+      const to = transposed ? places.rows : places.columns;
+      for (let k = 0; k < size; k++) work[k] = right[from[k]!]!;
+      if (transposed) factors!.solveTransposed(work);
+      else factors!.solve(work);
+      for (let k = 0; k < size; k++) solution[to[k]!] = work[k]!;
+    },
+    isWithin: (bound, x, b) => isWithin(bound, equations, values, x, b),
+    backwardError: (x, b, residual) => backwardError(equations, values, x, b, residual),
+    pivotsAreFresh: () => pivotsAreFresh,
+    chooseAnew,
+  });
+  const accepted = createAcceptedSolve(size, size, operations(equationsOf(pattern), false));
+  const acceptedTransposed = createAcceptedSolve(
+    size,
+    size,
+    operations(transposedEquationsOf(pattern), true),
+  );
+
+  const solveInPlace = (b: Float64Array, transposed: boolean): SolveStatus => {
     if (state !== 'ready') throw new Error('solve: no factors stand; factorise first');
-    if (b.length !== size && b.length !== size + 1)
-      throw new RangeError(`solve: right-hand side has length ${b.length}, the matrix size ${size}`);
+    checkLength(b, size);
+    for (let k = 0; k < size; k++) given[k] = b[k]!;
+    const status = transposed ? acceptedTransposed(given, answer) : accepted(given, answer);
+    if (status.kind === 'solved' || status.kind === 'inaccurate')
+      for (let k = 0; k < size; k++) b[k] = answer[k]!;
+    return status;
   };
 
   return {
     pattern,
     values,
     factorise() {
-      lu.fill(0);
-      for (let c = 0; c < size; c++)
-        for (let p = columnStart[c]!; p < columnStart[c + 1]!; p++) lu[rowIndex[p]! * size + c] = values[p]!;
-      sign = 1;
-      state = 'singular';
-      for (let i = 0; i < size; i++) order[i] = i;
-      for (let k = 0; k < size; k++) {
-        let pivot = k;
-        for (let i = k; i < size; i++) {
-          const candidate = lu[i * size + k]!;
-          if (!Number.isFinite(candidate)) return { kind: 'not-finite', column: k };
-          if (Math.abs(candidate) > Math.abs(lu[pivot * size + k]!)) pivot = i;
-        }
-        if (lu[pivot * size + k] === 0) return { kind: 'singular', column: k };
-        if (pivot !== k) {
-          for (let j = 0; j < size; j++) {
-            const held = lu[k * size + j]!;
-            lu[k * size + j] = lu[pivot * size + j]!;
-            lu[pivot * size + j] = held;
-          }
-          const held = order[k]!;
-          order[k] = order[pivot]!;
-          order[pivot] = held;
-          sign = sign === 1 ? -1 : 1;
-        }
-        const diagonal = lu[k * size + k]!;
-        for (let i = k + 1; i < size; i++) {
-          const factor = (lu[i * size + k]! /= diagonal);
-          if (factor !== 0)
-            for (let j = k + 1; j < size; j++) lu[i * size + j]! -= factor * lu[k * size + j]!;
-        }
-      }
+      if (factors?.refactor(values) !== sound) return chooseAnew();
+      pivotsAreFresh = false;
       state = 'ready';
-      return factored;
+      return refactored;
     },
-    solve(b) {
-      check(b);
-      for (let i = 0; i < size; i++) {
-        let sum = b[order[i]!]!;
-        for (let j = 0; j < i; j++) sum -= lu[i * size + j]! * work[j]!;
-        work[i] = sum;
-      }
-      for (let i = size - 1; i >= 0; i--) {
-        let sum = work[i]!;
-        for (let j = i + 1; j < size; j++) sum -= lu[i * size + j]! * work[j]!;
-        work[i] = sum / lu[i * size + i]!;
-      }
-      for (let i = 0; i < size; i++) b[i] = work[i]!;
-      return solved;
-    },
-    solveTransposed(b) {
-      check(b);
-      for (let i = 0; i < size; i++) {
-        let sum = b[i]!;
-        for (let j = 0; j < i; j++) sum -= lu[j * size + i]! * work[j]!;
-        work[i] = sum / lu[i * size + i]!;
-      }
-      for (let i = size - 1; i >= 0; i--) {
-        let sum = work[i]!;
-        for (let j = i + 1; j < size; j++) sum -= lu[j * size + i]! * work[j]!;
-        work[i] = sum;
-      }
-      for (let i = 0; i < size; i++) b[order[i]!] = work[i]!;
-      return solved;
-    },
-    determinantSign() {
-      if (state !== 'ready') return 0;
-      let negative = sign === -1;
-      for (let k = 0; k < size; k++) if (lu[k * size + k]! < 0) negative = !negative;
-      return negative ? -1 : 1;
-    },
-    logDeterminant() {
-      if (state !== 'ready') return -Infinity;
-      let sum = 0;
-      for (let k = 0; k < size; k++) sum += Math.log(Math.abs(lu[k * size + k]!));
-      return sum;
-    },
+    solve: (b) => solveInPlace(b, false),
+    solveTransposed: (b) => solveInPlace(b, true),
+    determinantSign: () => (state === 'ready' ? determinantSign(factors!.places, factors!.inversePivot) : 0),
+    logDeterminant: () => (state === 'ready' ? logDeterminant(factors!.inversePivot) : -Infinity),
   };
+}
+
+/** Refuses a right-hand side of the wrong length, with both lengths. */
+export function checkLength(b: Float64Array, size: number): void {
+  if (b.length !== size && b.length !== size + 1)
+    throw new RangeError(`solve: right-hand side has length ${b.length}, the matrix size ${size}`);
 }
