@@ -25,6 +25,8 @@ const ofMosfet: Readonly<Record<string, Quantity<MosfetOperating>>> = {
   /** |V_DS| − V_DSsat inside the series resistances, V; in cutoff the (negative) overdrive. */
   saturationMargin: (at) =>
     at.region === 'cutoff' ? Math.min(at.overdrive, 0) : at.channelVoltage - at.saturationVoltage,
+  /** |V_DS| − V_DSsat inside the series resistances, V, whatever the region: negative in triode. */
+  edge: (at) => at.channelVoltage - at.saturationVoltage,
   /** 1 unless the channel is in cutoff. */
   conducts: (at) => (at.region === 'cutoff' ? 0 : 1),
   /** 1 where the body diode carries the current. */

@@ -1,11 +1,15 @@
 import { formatQuantity } from '../values/format.ts';
 
-/** Figures as they stand in sentences: four significant figures, no idle zeros, a true minus. */
-export const volts = (value: number): string => formatQuantity(value, 'V', { trim: true });
-export const amperes = (value: number): string => formatQuantity(value, 'A', { trim: true });
-export const watts = (value: number): string => formatQuantity(value, 'W', { trim: true });
-export const ohms = (value: number): string => formatQuantity(value, 'Ω', { trim: true });
-export const celsius = (value: number): string => formatQuantity(value, '°C');
+/** A figure as it stands in a sentence: four significant figures, no idle zeros, a true minus. */
+const inUnit = (unit: string) => (value: number) =>
+  Number.isFinite(value) ? formatQuantity(value, unit, { trim: true }) : 'no figure';
+
+export const volts = inUnit('V');
+export const amperes = inUnit('A');
+export const watts = inUnit('W');
+export const ohms = inUnit('Ω');
+export const celsius = inUnit('°C');
+export const pureNumber = inUnit('');
 
 /** `Q1`, `Q1 and Q2`, `Q1, Q2 and Q3`. */
 export const listed = (names: readonly string[]): string =>

@@ -25,16 +25,22 @@ export interface Judgement {
 /** Gives an element's quantity by name, SI. */
 export type Measure = (element: number, quantity: string) => number;
 
-/** Evaluates the conditions at one point. */
+const notSet = 'what the duty asks is not set by the drawing';
+
+/** Evaluates the conditions at one point. A quantity that the drawing does not set is NaN. */
 export const judge = ({ conditions, remarks }: DutyConditions, measure: Measure): Judgement => {
   const lost = conditions.flatMap((condition) => {
     const quantity = measure(condition.limit.element, condition.limit.quantity);
-    return keeps(condition.limit, quantity) ? [] : [{ condition, reasons: condition.say(quantity) }];
+    if (keeps(condition.limit, quantity)) return [];
+    // What only the declared leak decides has no figure, and no duty rests on it.
+    const reasons = Number.isNaN(quantity) ? [notSet] : condition.say(quantity);
+    return [{ condition, reasons }];
   });
   const missed = lost.filter(({ condition }) => condition.loses === 'missed');
-  if (missed.length > 0) return { verdict: 'missed', reasons: missed.flatMap((entry) => entry.reasons) };
+  if (missed.length > 0)
+    return { verdict: 'missed', reasons: [...new Set(missed.flatMap((entry) => entry.reasons))] };
   return {
     verdict: lost.length > 0 ? 'at-risk' : 'held',
-    reasons: [...lost.flatMap((entry) => entry.reasons), ...remarks],
+    reasons: [...new Set([...lost.flatMap((entry) => entry.reasons), ...remarks])],
   };
 };

@@ -1,6 +1,6 @@
-import { formatPercent, formatQuantity } from '../../values/format.ts';
+import { formatPercent } from '../../values/format.ts';
 import type { Limit } from '../../../solver/questions/limit.ts';
-import { ohms, volts } from '../words.ts';
+import { ohms, pureNumber, volts } from '../words.ts';
 import type { Condition, DutyConditions, Measure } from './condition.ts';
 import type { ConductTerms, DeviceFacts } from './terms.ts';
 
@@ -20,7 +20,7 @@ export const dropLimit = (element: number, terms: ConductTerms, facts: DeviceFac
     const bound = onResistanceFactor * facts.largestOnResistance;
     return { element, quantity: 'onResistance', sense: 'most', bound };
   }
-  return { element, quantity: 'saturationMargin', sense: 'below', bound: 0 };
+  return { element, quantity: 'edge', sense: 'below', bound: 0 };
 };
 
 const sayDrop =
@@ -78,7 +78,7 @@ export const mosfetConduct = (element: number, terms: ConductTerms, facts: Devic
       ...coverage(element, facts),
     ],
     remarks: [
-      ...(drop.quantity === 'saturationMargin' ? ['region only'] : []),
+      ...(drop.quantity === 'edge' ? ['region only'] : []),
       ...(facts.enteredBy === 'model' ? [noFact] : []),
     ],
   };
@@ -95,9 +95,7 @@ export const bipolarConduct = (element: number, terms: ConductTerms): DutyCondit
     {
       limit: { element, quantity: 'forcedGain', sense: 'most', bound: terms.forcedGain },
       loses: 'missed',
-      say: (value) => [
-        `collector over base current is ${formatQuantity(value, '', { trim: true })}, more than ${terms.forcedGain}`,
-      ],
+      say: (value) => [`collector over base current is ${pureNumber(value)}, more than ${terms.forcedGain}`],
     },
     ...(terms.dropLimit === undefined
       ? []
