@@ -1,0 +1,98 @@
+/**
+ * Newton's method in correction form, J·dx = −F(x), with device-wise limits; node steps clipped to the hull of the
+ * rails and capped. Allocates nothing.
+ */
+import { at, codeAt, indexAt } from '../elements/at.ts';
+import { Phase } from '../elements/law.ts';
+import { measureRows, type Residual } from './accept.ts';
+import { assembleMatrix, assembleResidual, loadElements } from './evaluate.ts';
+import { NODE_STEP, STEP_FLOOR_AMPERES, STEP_FLOOR_VOLTS, STEP_PART } from './limits.ts';
+import type { Prepared } from './prepared.ts';
+
+export type NewtonOutcome = 'accepted' | 'iterations' | 'singular';
+
+/** What another method adds to the equations of the free nodes: G·(x − anchor), A. */
+export interface Shunt {
+  /** S; 0 where nothing is added. */
+  conductance: number;
+  /** V; length `size`. */
+  readonly anchor: Float64Array;
+}
+
+export interface NewtonRun {
+  /** How non-linear laws begin: `Phase.start` cold, `Phase.adopt` from the point at hand. */
+  first: Phase;
+  maxIterations: number;
+  shunt: Shunt | null;
+  /** Counted up by one for each linear solution. */
+  iterations: number;
+  readonly residual: Residual;
+  /** Unknown in which the matrix was singular, or −1. */
+  singularAt: number;
+}
+
+/** Iterates from the point at hand until every row holds and the last step was small. */
+export function newton(prepared: Prepared, run: NewtonRun): NewtonOutcome {
+  const { work, residual, system, size } = prepared;
+  work.phase = run.first;
+  let settledStep = false;
+  for (let iteration = 0; ; iteration++) {
+    loadElements(prepared);
+    assembleResidual(prepared);
+    if (run.shunt) addShunt(prepared, run.shunt, false);
+    if (settledStep && !work.limited) {
+      measureRows(prepared, run.residual);
+      if (run.residual.ratio <= 1) return 'accepted';
+    }
+    if (iteration >= run.maxIterations) return 'iterations';
+    assembleMatrix(prepared);
+    if (run.shunt) addShunt(prepared, run.shunt, true);
+    const status = system.factorise();
+    if (status.kind === 'singular' || status.kind === 'not-finite') {
+      run.singularAt = status.column;
+      return 'singular';
+    }
+    for (let row = 0; row < size; row++) residual[row] = -at(residual, row);
+    const solved = system.solve(residual);
+    if (solved.kind === 'singular' || solved.kind === 'not-finite') {
+      run.singularAt = solved.column;
+      return 'singular';
+    }
+    run.iterations++;
+    settledStep = takeStep(prepared) && !work.limited;
+    work.phase = Phase.limit;
+  }
+}
+
+/** Moves the unknowns by the step in `residual`, limited. True where the step was small and not limited. */
+function takeStep({ x, residual, size, rowKinds, hull }: Prepared): boolean {
+  let small = true;
+  const nodeCount = hull.bound.length;
+  for (let k = 0; k < size; k++) {
+    const from = at(x, k);
+    let step = at(residual, k);
+    if (codeAt(rowKinds, k) === 0) {
+      if (Math.abs(step) > STEP_PART * Math.abs(from) + STEP_FLOOR_VOLTS) small = false;
+      const isFree = k + 1 >= nodeCount || codeAt(hull.pinned, k + 1) === 0;
+      if (isFree) {
+        step = Math.min(Math.max(step, -NODE_STEP), NODE_STEP);
+        if (k + 1 < nodeCount && codeAt(hull.bound, k + 1) === 1)
+          step = Math.min(Math.max(from + step, hull.low), hull.high) - from;
+      }
+    } else if (Math.abs(step) > STEP_PART * Math.abs(from) + STEP_FLOOR_AMPERES) small = false;
+    x[k] = from + step;
+  }
+  return small;
+}
+
+function addShunt(prepared: Prepared, { conductance, anchor }: Shunt, toMatrix: boolean): void {
+  const { x, residual, diagonal, size, rowKinds, hull, system } = prepared;
+  for (let k = 0; k < size; k++) {
+    if (codeAt(rowKinds, k) === 1) continue;
+    if (k + 1 < hull.pinned.length && codeAt(hull.pinned, k + 1) === 1) continue;
+    if (toMatrix) {
+      const slot = indexAt(diagonal, k);
+      system.values[slot] = at(system.values, slot) + conductance;
+    } else residual[k] = at(residual, k) + conductance * (at(x, k) - at(anchor, k));
+  }
+}

@@ -1,0 +1,162 @@
+/** A circuit made ready: unknowns numbered, pattern and slots resolved, elements laid out by law. Done once. */
+import type { Circuit, Element } from '../circuit.ts';
+import { Phase, type Batch, type ElementLaw, type Workspace } from '../elements/law.ts';
+import { createLinearSystem, type LinearSystem } from '../matrix/linearSystem.ts';
+import { createPattern, type EntryPlace } from '../matrix/pattern.ts';
+import { findHull, type Hull } from '../structure/hull.ts';
+
+/** First places of one element in the arrays of the workspace. */
+export interface ElementPlace {
+  readonly element: Element;
+  /** Index in `circuit.elements`. */
+  readonly index: number;
+  readonly unknown: number;
+  readonly slot: number;
+  readonly derived: number;
+  readonly memory: number;
+  /** First place in `seenValues`. */
+  readonly value: number;
+}
+
+/**
+ * Unknowns: voltages of nodes 1 … , then each element's internal nodes (V) and branch currents (A). The last place
+ * of `x` and `residual` is the reference node.
+ */
+export interface Prepared {
+  readonly circuit: Circuit;
+  /** Number of unknowns, which is also the reference's place in `x` and `residual`. */
+  readonly size: number;
+  /** 0 where the row is a current (A), 1 where it is a branch (V); length `size`. */
+  readonly rowKinds: Uint8Array;
+  /** For messages; length `size`. */
+  readonly unknownNames: readonly string[];
+  readonly places: readonly ElementPlace[];
+  readonly placeOf: ReadonlyMap<Element, ElementPlace>;
+  readonly batches: readonly { readonly law: ElementLaw; readonly batch: Batch }[];
+
+  // --- From elements to rows ---
+  /** Unknown of each of the elements' local unknowns; length of `work.x`. */
+  readonly gather: Int32Array;
+  /** Slot of each of the elements' local Jacobian entries; length of `work.jacobian`. */
+  readonly slots: Int32Array;
+  /** Row (unknown) and column (unknown) of each of those entries. */
+  readonly entryRows: Int32Array;
+  readonly entryColumns: Int32Array;
+  /** Slot of each unknown's diagonal; length `size`. */
+  readonly diagonal: Int32Array;
+
+  // --- The point at hand ---
+  readonly system: LinearSystem;
+  readonly work: Workspace;
+  /** Unknowns, V and A; length `size + 1`. */
+  readonly x: Float64Array;
+  /** Sum of each row, then in place the step that mends it; length `size + 1`. */
+  readonly residual: Float64Array;
+  /** Sum of magnitudes of the currents in each row (A), and of |G|·|V| (A, or V for branches); length `size + 1`. */
+  readonly magnitude: Float64Array;
+  readonly rounding: Float64Array;
+
+  readonly hull: Hull;
+
+  // --- What `derived` was worked out from ---
+  readonly seenValues: Float64Array;
+  readonly seenTemperatures: Float64Array;
+  readonly seenLeaks: Float64Array;
+}
+
+/** Numbers and lays out a circuit whose structure is known to be sound. */
+export function layOut(circuit: Circuit): Prepared {
+  const nodeCount = circuit.nodes.length;
+  const unknownNames: string[] = circuit.nodes.slice(1);
+  const rowKinds: number[] = unknownNames.map(() => 0);
+
+  // --- Elements of one law side by side ---
+  const byLaw = new Map<ElementLaw, { element: Element; index: number }[]>();
+  circuit.elements.forEach((element, index) => {
+    const group = byLaw.get(element.law);
+    if (group) group.push({ element, index });
+    else byLaw.set(element.law, [{ element, index }]);
+  });
+
+  const places: ElementPlace[] = [];
+  const batches: { law: ElementLaw; batch: Batch }[] = [];
+  const gather: number[] = [];
+  const entryRows: number[] = [];
+  const entryColumns: number[] = [];
+  let derived = 0;
+  let memory = 0;
+  let value = 0;
+  // The reference's place, size, is only known at the end; −1 stands in.
+  for (const [law, group] of byLaw) {
+    batches.push({
+      law,
+      batch: { count: group.length, unknown: gather.length, slot: entryRows.length, derived, memory },
+    });
+    for (const { element, index } of group) {
+      places.push({ element, index, unknown: gather.length, slot: entryRows.length, derived, memory, value });
+      const local = element.nodes.map((node) => node - 1);
+      for (const name of law.internals) local.push(addUnknown(`${element.name}.${name}`, 0));
+      for (const name of law.branches) local.push(addUnknown(`${element.name}.${name}`, 1));
+      gather.push(...local);
+      for (const [row, column] of law.pattern) {
+        entryRows.push(local[row] ?? -1);
+        entryColumns.push(local[column] ?? -1);
+      }
+      derived += law.derivedSize;
+      memory += law.memorySize;
+      value += element.values.length;
+    }
+  }
+  const size = unknownNames.length;
+
+  function addUnknown(name: string, kind: 0 | 1): number {
+    unknownNames.push(name);
+    rowKinds.push(kind);
+    return unknownNames.length - 1;
+  }
+
+  // --- Pattern; every node keeps its diagonal, for the methods that add to it ---
+  const entries: EntryPlace[] = entryRows.map((row, k) => [row, entryColumns[k] ?? -1]);
+  const diagonals = rowKinds.flatMap((kind, row): EntryPlace[] => (kind === 0 ? [[row, row]] : []));
+  const pattern = createPattern(size, [...entries, ...diagonals]);
+  const system = createLinearSystem(pattern);
+  const orReference = (unknown: number) => (unknown < 0 ? size : unknown);
+
+  const byIndex = [...places].sort((a, b) => a.index - b.index);
+  return {
+    circuit,
+    size,
+    rowKinds: Uint8Array.from(rowKinds),
+    unknownNames,
+    places: byIndex,
+    placeOf: new Map(byIndex.map((place) => [place.element, place])),
+    batches,
+    gather: Int32Array.from(gather, orReference),
+    slots: Int32Array.from(entries, ([row, column]) => pattern.slotOf(row, column)),
+    entryRows: Int32Array.from(entryRows, orReference),
+    entryColumns: Int32Array.from(entryColumns, orReference),
+    diagonal: Int32Array.from(rowKinds, (kind, row) =>
+      kind === 0 ? pattern.slotOf(row, row) : pattern.entryCount,
+    ),
+    system,
+    work: {
+      x: new Float64Array(gather.length),
+      residual: new Float64Array(gather.length),
+      jacobian: new Float64Array(entries.length),
+      derived: new Float64Array(derived),
+      memory: new Float64Array(memory),
+      phase: Phase.exact,
+      limited: false,
+      sourceScale: 1,
+      gainScale: 1,
+    },
+    x: new Float64Array(size + 1),
+    residual: new Float64Array(size + 1),
+    magnitude: new Float64Array(size + 1),
+    rounding: new Float64Array(size + 1),
+    hull: findHull(circuit, nodeCount),
+    seenValues: new Float64Array(value).fill(NaN),
+    seenTemperatures: new Float64Array(places.length).fill(NaN),
+    seenLeaks: new Float64Array(places.length).fill(NaN),
+  };
+}

@@ -1,0 +1,50 @@
+/** Works out anew what depends on values and temperature, where these changed since the last time. */
+import { at } from '../elements/at.ts';
+import { DECLARED_LEAK } from '../elements/constants.ts';
+import { updateHull } from '../structure/hull.ts';
+import type { Prepared } from './prepared.ts';
+import type { SettleOptions } from './settlement.ts';
+
+/** Part of the declared leak by element. */
+export type LeakScale = (element: number) => number;
+
+export const wholeLeak: LeakScale = () => 1;
+
+/**
+ * A hundredth of the leak, but not of every element alike: a divider made of equal leaks would rest where it
+ * rested before, and is as little set by the drawing. The shares follow the golden ratio, 0.5 … 1.5 hundredths.
+ */
+export const hundredthLeak: LeakScale = (element) => 0.01 * (0.5 + ((element * 0.6180339887498949) % 1));
+
+/** Brings `derived` up to date. Returns the element with a value that is no finite number, if any. */
+export function refresh(prepared: Prepared, options: SettleOptions, leakScale: LeakScale): number | null {
+  const { places, work, seenValues, seenTemperatures, seenLeaks } = prepared;
+  let changed = false;
+  for (let e = 0; e < places.length; e++) {
+    const place = places[e];
+    if (!place) continue;
+    const { element, value } = place;
+    const { values, law } = element;
+    const temperature = options.temperatures ? at(options.temperatures, e) : options.temperature;
+    const leak = DECLARED_LEAK * leakScale(e);
+    let same = temperature === at(seenTemperatures, e) && leak === at(seenLeaks, e);
+    for (let k = 0; k < values.length; k++) {
+      const present = at(values, k);
+      if (Object.is(present, at(seenValues, value + k))) continue; // NaN stands for "not given" in some laws
+      same = false;
+      seenValues[value + k] = present;
+      changed = true;
+    }
+    if (same) continue;
+    seenTemperatures[e] = temperature;
+    seenLeaks[e] = leak;
+    law.derive(values, { temperature, leak }, work.derived, place.derived);
+    for (let k = 0; k < law.derivedSize; k++)
+      if (Number.isNaN(at(work.derived, place.derived + k))) {
+        seenTemperatures[e] = NaN;
+        return e;
+      }
+  }
+  if (changed) updateHull(prepared.circuit, prepared.hull);
+  return null;
+}

@@ -1,0 +1,97 @@
+/** What preparing and settling give back, as values. SI units; node 0 is the reference. */
+import type { Element } from '../circuit.ts';
+
+/**
+ * How the point was reached: Newton alone; by a pseudo-transient; with the sources ramped; by arc-length
+ * homotopy.
+ */
+export type Method = 'direct' | 'timed' | 'ramped' | 'traced';
+
+export interface Settlement {
+  readonly settled: true;
+  readonly method: Method;
+  /** Newton iterations, over all methods tried. */
+  readonly iterations: number;
+  /** Worst current row in amperes, and the worst row's ratio to its bound of acceptance (at most 1). */
+  readonly residual: { readonly amperes: number; readonly ratio: number };
+  /** V by node against the reference. */
+  readonly voltages: Float64Array;
+  /** Currents into the element, A, in the order of its terminals. */
+  terminalCurrents(element: Element): Float64Array;
+  /** The element's operating point, as its law states it. */
+  operating<Operating>(element: Element<Operating>): Operating;
+  /** What only the declared leak decides; empty where that was not asked for. */
+  readonly unset: {
+    /** Nodes whose voltage moves by more than 1 mV with the leak at a hundredth. */
+    readonly nodes: readonly number[];
+    /** Elements with a voltage between two terminals that does. */
+    readonly elements: readonly Element[];
+  };
+  /** All unknowns: a start for settling again. */
+  readonly state: Float64Array;
+}
+
+export type UnsettledReason =
+  /** No method found a point within its budget. */
+  | 'budget'
+  | 'cancelled'
+  /** A parameter is not a finite number, or the temperature is not above 0 K. */
+  | 'parameter'
+  /** The equations have no single answer at these values. */
+  | 'singular'
+  /** The point found lies outside the rails, or carries more than 1 MA: no reading. */
+  | 'beyond-rails'
+  | 'over-current';
+
+export interface Unsettled {
+  readonly settled: false;
+  readonly reason: UnsettledReason;
+  /** A sentence a person can act on. */
+  readonly message: string;
+  /** Names of the nodes and of the elements concerned, the worst first. */
+  readonly nodes: readonly string[];
+  readonly elements: readonly string[];
+  readonly iterations: number;
+}
+
+export type SettleResult = Settlement | Unsettled;
+
+export interface SettleOptions {
+  /** Of every element, K. */
+  readonly temperature: number;
+  /** Of each element, K, in the order of the circuit's elements; in place of `temperature`. */
+  readonly temperatures?: Float64Array;
+  /** `state` of an earlier settlement of the same prepared circuit: a warm start. */
+  readonly start?: Float64Array;
+  /** Most iterations of each method; `direct` alone where `methods` says so. */
+  readonly budget?: Budget;
+  /** Methods to try, in this order; all four. */
+  readonly methods?: readonly Method[];
+  /** Find what only the declared leak decides; true. */
+  readonly findUnset?: boolean;
+  readonly signal?: AbortSignal;
+}
+
+export interface Budget {
+  /** Newton alone; 200. */
+  readonly direct?: number;
+  /** Newton iterations of each of the other methods; 5000. */
+  readonly other?: number;
+  /** ms for everything; 5000. */
+  readonly time?: number;
+}
+
+/** A fault of the drawing that no arithmetic can mend. */
+export interface StructureFault {
+  readonly code:
+    | 'no-ground'
+    | 'no-path-to-ground'
+    | 'floating-gate'
+    | 'voltage-loop'
+    | 'shorted-source'
+    | 'current-cut-set';
+  /** A sentence a person can act on. */
+  readonly message: string;
+  readonly nodes: readonly string[];
+  readonly elements: readonly string[];
+}
