@@ -40,6 +40,8 @@ const checked = <Value>(check: (value: unknown) => Result<unknown>) =>
         message: fault.message,
         path: fault.path === undefined ? [] : [fault.path],
         params: { fault } satisfies IssueParams,
+        // Checks of the whole object run only on values that are right by themselves.
+        continue: false,
       });
     }
   });
