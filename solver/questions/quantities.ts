@@ -2,20 +2,10 @@
  * Quantities of an operating point that a `Limit` can bound: every figure an element reads (yes and no as 1 and 0),
  * and what is derived from them here. SI units.
  */
+import type { BipolarOperating } from '../elements/bipolar.ts';
 import type { MosfetOperating } from '../elements/mosfet.ts';
 
 type Quantity<Operating> = (at: Operating) => number;
-
-/** What is common to the readings of a bipolar transistor, signs as they are at the pins. */
-interface BipolarPoint {
-  readonly region: string;
-  /** +1 n-p-n, −1 p-n-p. */
-  readonly polarity?: 1 | -1;
-  readonly baseToEmitter: number;
-  readonly collectorToEmitter: number;
-  readonly collectorCurrent: number;
-  readonly baseCurrent: number;
-}
 
 const ofMosfet: Readonly<Record<string, Quantity<MosfetOperating>>> = {
   /** |V_DS|, V. */
@@ -45,7 +35,7 @@ const ofMosfet: Readonly<Record<string, Quantity<MosfetOperating>>> = {
   forwardJunction: (at) => Math.max(at.drainJunctionCurrent, at.sourceJunctionCurrent, 0),
 };
 
-const ofBipolar: Readonly<Record<string, Quantity<BipolarPoint>>> = {
+const ofBipolar: Readonly<Record<string, Quantity<BipolarOperating>>> = {
   /** |V_CE|, V. */
   drop: (at) => Math.abs(at.collectorToEmitter),
   active: (at) => (at.region === 'active' ? 1 : 0),
@@ -54,8 +44,6 @@ const ofBipolar: Readonly<Record<string, Quantity<BipolarPoint>>> = {
   currentMagnitude: (at) => Math.abs(at.collectorCurrent),
   /** |I_B|, A. */
   baseMagnitude: (at) => Math.abs(at.baseCurrent),
-  /** The base–emitter junction's reverse voltage, V: negative while it is biased forward. */
-  reverseBase: (at) => -at.baseToEmitter * (at.polarity ?? 1),
   /** |I_C|/|I_B|; 0 where neither flows. */
   forcedGain: (at) => (at.collectorCurrent === 0 ? 0 : Math.abs(at.collectorCurrent / at.baseCurrent)),
 };

@@ -28,7 +28,7 @@ const shape = (
   figure: Shape['figure'],
 ): Shape => ({ rating, quantity, sign, title, figure });
 
-const shapes: Readonly<Record<string, readonly Shape[]>> = {
+const shapes: Readonly<Record<'mosfet' | 'bipolar' | 'diode', readonly Shape[]>> = {
   mosfet: [
     shape('drainToSource', 'drop', 1, 'drain to source', volts),
     shape('gateToSource', 'drive', 1, 'gate to source', volts),
@@ -42,7 +42,7 @@ const shapes: Readonly<Record<string, readonly Shape[]>> = {
   bipolar: [
     shape('collectorToEmitter', 'drop', 1, 'collector to emitter', volts),
     shape('collectorCurrent', 'currentMagnitude', 1, 'collector current', amperes),
-    shape('emitterToBase', 'reverseBase', 1, 'emitter to base', volts),
+    shape('emitterToBase', 'baseToEmitter', -1, 'emitter to base', volts),
   ],
 };
 
@@ -108,17 +108,20 @@ const powerLimits = (element: number, ratings: Ratings, ambient: number): readon
  * The ratings of a device as limits of its element.
  *
  * @param family whose quantities they bound: `mosfet`, `bipolar`, or `diode` for all two-pin devices
+ * @param polarity −1 for a p-n-p transistor, whose base is reverse biased when it is positive
  * @param ambient °C
  */
 export const ratingLimits = (
   family: 'mosfet' | 'bipolar' | 'diode',
   element: number,
   ratings: Ratings,
+  polarity: 1 | -1,
   ambient: number,
 ): readonly RatingLimit[] => [
-  ...(shapes[family] ?? []).flatMap(({ rating, quantity, sign, title, figure }): readonly RatingLimit[] => {
+  ...shapes[family].flatMap(({ rating, quantity, sign: way, title, figure }): readonly RatingLimit[] => {
     const stated = ratings[rating];
     if (typeof stated !== 'number') return [];
+    const sign = quantity === 'baseToEmitter' ? way * polarity : way;
     return [
       {
         rating,
