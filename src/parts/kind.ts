@@ -7,6 +7,7 @@
 import type { z } from 'zod';
 import type { Element } from '../../solver/circuit.ts';
 import type { SymbolArt } from '../../symbols/art.ts';
+import type { QuantityName } from '../values/quantities.ts';
 import type { Fault, Result } from '../values/result.ts';
 import type { Device, DeviceType } from './devices/device.ts';
 import type { Field } from './field.ts';
@@ -25,6 +26,8 @@ export type Values = Readonly<Record<string, unknown>>;
 export interface PartContext {
   /** The part's name, or its id where it has none: for element names and messages. */
   readonly name: string;
+  /** A rail's free label, which stands at it beside its name: `+12V`. */
+  readonly label?: string;
   readonly values: Values;
   /** The device the part names, where its kind takes one. */
   readonly device?: Device;
@@ -39,6 +42,7 @@ export type Figures = Readonly<Record<string, number>>;
 export interface Draw {
   /** As in `R1.resistance`, `Q1.threshold`. */
   readonly key: string;
+  readonly quantity: QuantityName;
   readonly value: number;
   /** Hard limits; equal to `value` where nothing is stated. */
   readonly low: number;
@@ -117,10 +121,13 @@ export interface PartKind {
 
   /**
    * Everything about the part that can be varied. Depends on values, device and law, not on the surroundings.
-   * Faults: values that cannot be resolved, a device that cannot be fitted.
+   * Faults: a device whose facts allow no fit.
    */
   draws(context: PartContext, law: Law): Result<readonly Draw[]>;
-  /** What is assumed about the part because nobody stated it, in sentences. */
+  /**
+   * What is assumed about the part because nobody stated it: clauses without the part's name, alike for parts on which
+   * the same is assumed, so that a record can say `Q1, Q2: length modulation 0 (not stated)`.
+   */
   assumptions(context: PartContext, law: Law): readonly string[];
 
   /**

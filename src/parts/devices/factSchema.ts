@@ -1,6 +1,5 @@
 /** The schema of a device's facts, from the list of what facts its type has. */
 import * as z from 'zod';
-import type { QuantityName } from '../../values/quantities.ts';
 import type { FactShape } from './conditions.ts';
 import { facts, factFigures } from './fact.ts';
 import type { Fact, FactFigures } from './fact.ts';
