@@ -90,7 +90,12 @@ export type Primitive = PathPrimitive | CirclePrimitive | TextPrimitive;
 export interface Drawing {
   readonly primitives: readonly Primitive[];
   /** The smallest box that holds every primitive, pixels. */
-  readonly bounds: { readonly left: number; readonly top: number; readonly right: number; readonly bottom: number };
+  readonly bounds: {
+    readonly left: number;
+    readonly top: number;
+    readonly right: number;
+    readonly bottom: number;
+  };
   /** Readings for which there was truly no room, by name, for the ledger to list. */
   readonly unplaced: readonly string[];
 }
