@@ -79,5 +79,6 @@ export {
   JUNCTION_GUARD_RESISTANCE,
   REFERENCE_TEMPERATURE,
   RESISTANCE_FLOOR,
+  SILICON_BAND_GAP,
   thermalVoltage,
 } from './elements/constants.ts';

@@ -1,5 +1,5 @@
-import { amplifier as element } from '../../solver/elements/amplifier.ts';
-import type { AmplifierOperating } from '../../solver/elements/amplifier.ts';
+import { amplifier as element } from '../../solver/index.ts';
+import type { AmplifierOperating } from '../../solver/index.ts';
 import { symbols } from '../../symbols/index.ts';
 import { definePart } from './definePart.ts';
 import { optional } from './field.ts';

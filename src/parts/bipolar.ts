@@ -1,5 +1,5 @@
-import { bipolar as element } from '../../solver/elements/bipolar.ts';
-import type { BipolarOperating } from '../../solver/elements/bipolar.ts';
+import { bipolar as element } from '../../solver/index.ts';
+import type { BipolarOperating } from '../../solver/index.ts';
 import { symbols } from '../../symbols/index.ts';
 import { definePart } from './definePart.ts';
 import { deviceOf, titleLine } from './deviceOf.ts';

@@ -1,4 +1,4 @@
-import { capacitor as element } from '../../solver/elements/capacitor.ts';
+import { capacitor as element } from '../../solver/index.ts';
 import { symbols } from '../../symbols/index.ts';
 import { definePart } from './definePart.ts';
 import { stated } from './field.ts';

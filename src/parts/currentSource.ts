@@ -1,4 +1,4 @@
-import { currentSource as element } from '../../solver/elements/current-source.ts';
+import { currentSource as element } from '../../solver/index.ts';
 import { symbols } from '../../symbols/index.ts';
 import { definePart } from './definePart.ts';
 import { aside, stated } from './field.ts';

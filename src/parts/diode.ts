@@ -1,5 +1,5 @@
-import { diode as junction, zener } from '../../solver/elements/diode.ts';
-import type { DiodeOperating } from '../../solver/elements/diode.ts';
+import { diode as junction, zener } from '../../solver/index.ts';
+import type { DiodeOperating } from '../../solver/index.ts';
 import { symbols } from '../../symbols/index.ts';
 import { formatStated } from '../values/value-text.ts';
 import { definePart } from './definePart.ts';

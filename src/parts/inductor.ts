@@ -1,5 +1,4 @@
-import { RESISTANCE_FLOOR } from '../../solver/elements/constants.ts';
-import { inductor as element } from '../../solver/elements/inductor.ts';
+import { RESISTANCE_FLOOR, inductor as element } from '../../solver/index.ts';
 import { symbols } from '../../symbols/index.ts';
 import { definePart } from './definePart.ts';
 import { optional, stated } from './field.ts';

@@ -1,5 +1,4 @@
-import { inductor } from '../../solver/elements/inductor.ts';
-import { resistor } from '../../solver/elements/resistor.ts';
+import { inductor, resistor } from '../../solver/index.ts';
 import { symbols } from '../../symbols/index.ts';
 import { definePart } from './definePart.ts';
 import { optional, stated } from './field.ts';

@@ -1,5 +1,5 @@
-import { logicOutput as element } from '../../solver/elements/logic-output.ts';
-import type { LogicOutputOperating } from '../../solver/elements/logic-output.ts';
+import { logicOutput as element } from '../../solver/index.ts';
+import type { LogicOutputOperating } from '../../solver/index.ts';
 import { symbols } from '../../symbols/index.ts';
 import { definePart } from './definePart.ts';
 import { optional } from './field.ts';

@@ -1,6 +1,5 @@
-import { currentSource } from '../../solver/elements/current-source.ts';
-import { mosfet as element } from '../../solver/elements/mosfet.ts';
-import type { MosfetOperating } from '../../solver/elements/mosfet.ts';
+import { currentSource, mosfet as element } from '../../solver/index.ts';
+import type { MosfetOperating } from '../../solver/index.ts';
 import { symbols } from '../../symbols/index.ts';
 import { formatStated } from '../values/value-text.ts';
 import { definePart } from './definePart.ts';

@@ -1,4 +1,4 @@
-import { potentiometer as element } from '../../solver/elements/potentiometer.ts';
+import { potentiometer as element } from '../../solver/index.ts';
 import { symbols } from '../../symbols/index.ts';
 import { formatPercent } from '../values/format.ts';
 import { resolveValue } from '../values/value-spec.ts';

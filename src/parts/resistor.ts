@@ -1,4 +1,4 @@
-import { resistor as element } from '../../solver/elements/resistor.ts';
+import { resistor as element } from '../../solver/index.ts';
 import { symbols } from '../../symbols/index.ts';
 import { definePart } from './definePart.ts';
 import { aside, optional, stated } from './field.ts';

@@ -1,4 +1,4 @@
-import { voltageSource } from '../../solver/elements/voltage-source.ts';
+import { voltageSource } from '../../solver/index.ts';
 import { symbols } from '../../symbols/index.ts';
 import { definePart } from './definePart.ts';
 import { aside, optional, stated } from './field.ts';

@@ -1,5 +1,4 @@
-import { RESISTANCE_FLOOR } from '../../solver/elements/constants.ts';
-import { contact } from '../../solver/elements/switch.ts';
+import { RESISTANCE_FLOOR, contact } from '../../solver/index.ts';
 import { symbols } from '../../symbols/index.ts';
 import { definePart } from './definePart.ts';
 import { optional } from './field.ts';

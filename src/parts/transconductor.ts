@@ -1,5 +1,5 @@
-import { transconductor as element } from '../../solver/elements/transconductor.ts';
-import type { TransconductorOperating } from '../../solver/elements/transconductor.ts';
+import { transconductor as element } from '../../solver/index.ts';
+import type { TransconductorOperating } from '../../solver/index.ts';
 import { symbols } from '../../symbols/index.ts';
 import { definePart } from './definePart.ts';
 import { stated } from './field.ts';

@@ -63,9 +63,9 @@ export const fieldDraws = (fields: readonly Field[], values: Values): readonly D
     return [];
   });
 
-/** `length modulation 0 (not stated)`. */
+/** `length modulation 0 (not stated)`; nought needs no unit. */
 export const notStated = (label: string, value: number, of: QuantityName): string =>
-  `${label} ${formatQuantity(value, of, { trim: true })} (not stated)`;
+  `${label} ${value === 0 ? '0' : formatQuantity(value, of, { trim: true })} (not stated)`;
 
 /** What is assumed of these entries: defaults that stand in for what nobody stated. */
 export const fieldAssumptions = (fields: readonly Field[], values: Values): readonly string[] =>

@@ -1,5 +1,5 @@
 /** Parameters of bipolar transistors at 25 °C, with the defaults of common practice. */
-import type { BipolarParameters } from '../../../solver/elements/bipolar.ts';
+import type { BipolarParameters } from '../../../solver/index.ts';
 import type { Figures } from '../kind.ts';
 import { figure } from '../values.ts';
 import type { BipolarDevice } from './bipolarSchema.ts';

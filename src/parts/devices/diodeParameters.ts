@@ -1,6 +1,6 @@
 /** Parameters of diodes, LEDs and Zeners at 25 °C, with the defaults of common practice. */
-import { SILICON_BAND_GAP } from '../../../solver/elements/constants.ts';
-import type { DiodeParameters, ZenerParameters } from '../../../solver/elements/diode.ts';
+import { SILICON_BAND_GAP } from '../../../solver/index.ts';
+import type { DiodeParameters, ZenerParameters } from '../../../solver/index.ts';
 import type { Figures } from '../kind.ts';
 import { figure } from '../values.ts';
 import type { DiodeDevice, LedDevice, ZenerDevice } from './diodeSchema.ts';

@@ -1,9 +1,6 @@
 /** A MOSFET's parameters at 25 °C, with the defaults of common practice, from its device and its own width and length. */
-import {
-  DISCRETE_SATURATION_CURRENT,
-  INTEGRATED_SATURATION_CURRENT,
-} from '../../../solver/elements/constants.ts';
-import type { MosfetParameters } from '../../../solver/elements/mosfet.ts';
+import { DISCRETE_SATURATION_CURRENT, INTEGRATED_SATURATION_CURRENT } from '../../../solver/index.ts';
+import type { MosfetParameters } from '../../../solver/index.ts';
 import type { Figures, Law } from '../kind.ts';
 import { figure } from '../values.ts';
 import type { MosfetDevice } from './mosfetSchema.ts';
@@ -73,7 +70,12 @@ export const commonParameters = (device: MosfetDevice, law: Law): readonly Param
       quantity: 'lengthModulation',
       fallback: { value: 0 },
     },
-    { key: 'bodyFactor', label: 'body factor', quantity: 'bodyFactor', fallback: { value: 0 } },
+    {
+      key: 'bodyFactor',
+      label: 'body factor',
+      quantity: 'bodyFactor',
+      fallback: { value: 0, silent: !isIntegrated(device) },
+    },
     {
       key: 'surfacePotential',
       label: 'surface potential 2φ_F',
