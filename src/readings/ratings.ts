@@ -7,7 +7,6 @@ export interface RatingLimit {
   /** As in the stage file: `drainToSource`, `junctionTemperature`. */
   readonly rating: string;
   readonly limit: Limit;
-  /** What the bound is derived from, where it is not the figure stated: `derated to 60 °C ambient`. */
   readonly say: (quantity: number) => string;
 }
 
@@ -132,3 +131,10 @@ export const ratingLimits = (
   }),
   ...powerLimits(element, ratings, ambient),
 ];
+
+/** The power rating of a resistor, W. */
+export const powerRating = (element: number, rated: number): RatingLimit => ({
+  rating: 'rating',
+  limit: { element, quantity: 'power', sense: 'most', bound: rated },
+  say: (power) => `rating passed: dissipation ${watts(power)}, rated ${watts(rated)}`,
+});

@@ -12,6 +12,7 @@ const missed = (
 ): Condition => ({
   limit: { element, quantity, sense, bound },
   loses: 'missed',
+  whenNotSet: 'lost',
   say: (value) => [say(value)],
 });
 

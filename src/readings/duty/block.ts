@@ -10,6 +10,7 @@ const atMost = (
 ): Condition => ({
   limit: { element, quantity, sense: 'most', bound },
   loses: 'missed',
+  whenNotSet: 'lost',
   say: (value) => [say(value)],
 });
 

@@ -6,6 +6,8 @@ import type { Verdict } from '../readings.ts';
 export interface Condition {
   readonly limit: Limit;
   readonly loses: 'missed' | 'at-risk';
+  /** A duty cannot rest on what the drawing does not set; a rating is not passed by it. */
+  readonly whenNotSet: 'lost' | 'kept';
   /** Why it is lost, in words with figures. */
   readonly say: (quantity: number) => readonly string[];
 }
@@ -32,6 +34,7 @@ export const judge = ({ conditions, remarks }: DutyConditions, measure: Measure)
   const lost = conditions.flatMap((condition) => {
     const quantity = measure(condition.limit.element, condition.limit.quantity);
     if (keeps(condition.limit, quantity)) return [];
+    if (Number.isNaN(quantity) && condition.whenNotSet === 'kept') return [];
     // What only the declared leak decides has no figure, and no duty rests on it.
     const reasons = Number.isNaN(quantity) ? [notSet] : condition.say(quantity);
     return [{ condition, reasons }];

@@ -46,6 +46,7 @@ const coverage = (element: number, facts: DeviceFacts): readonly Condition[] => 
     {
       limit: { element, quantity: 'gateToSource', sense: facts.polarity === 1 ? 'least' : 'most', bound },
       loses: 'at-risk',
+      whenNotSet: 'lost',
       say: (drive) => [
         'drive not covered by a fact',
         covered === undefined
@@ -64,17 +65,19 @@ export const mosfetConduct = (element: number, terms: ConductTerms, facts: Devic
       {
         limit: { element, quantity: 'overdrive', sense: 'above', bound: 0 },
         loses: 'missed',
+        whenNotSet: 'lost',
         say: (value) => [`the channel is off: overdrive ${volts(value)}`],
       },
       {
         limit: { element, quantity: 'channelShare', sense: 'least', bound: channelShare },
         loses: 'missed',
+        whenNotSet: 'lost',
         say: (value) => [
           `the channel carries ${formatPercent(value)} of the current, less than ${formatPercent(channelShare)}; ` +
             'the body diode carries the rest',
         ],
       },
-      { limit: drop, loses: 'missed', say: sayDrop(drop) },
+      { limit: drop, loses: 'missed', whenNotSet: 'lost', say: sayDrop(drop) },
       ...coverage(element, facts),
     ],
     remarks: [
@@ -90,24 +93,15 @@ export const bipolarConduct = (element: number, terms: ConductTerms): DutyCondit
     {
       limit: { element, quantity: 'saturated', sense: 'least', bound: 1 },
       loses: 'missed',
+      whenNotSet: 'lost',
       say: () => ['the transistor is not saturated'],
     },
     {
       limit: { element, quantity: 'forcedGain', sense: 'most', bound: terms.forcedGain },
       loses: 'missed',
+      whenNotSet: 'lost',
       say: (value) => [`collector over base current is ${pureNumber(value)}, more than ${terms.forcedGain}`],
     },
-    ...(terms.dropLimit === undefined
-      ? []
-      : [
-          {
-            limit: { element, quantity: 'drop', sense: 'most', bound: terms.dropLimit },
-            loses: 'missed',
-            say: (value: number) => [
-              `the drop is ${volts(value)}, more than its limit of ${volts(terms.dropLimit ?? 0)}`,
-            ],
-          } satisfies Condition,
-        ]),
   ],
   remarks: [],
 });

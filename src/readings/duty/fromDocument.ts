@@ -97,6 +97,7 @@ export const dutyTerms = (duty: Duty | undefined, device: Device, ambient: numbe
 /** What a device's data sheet says of it as a switch. */
 export const deviceFacts = (device: Device): DeviceFacts => {
   const enteredBy = device.facts === undefined ? 'model' : 'facts';
+  if (device.type === 'bipolar') return { enteredBy, polarity: device.polarity === 'n-p-n' ? 1 : -1 };
   if (device.type !== 'mosfet') return { enteredBy, polarity: 1 };
   const { figure, at } = mosfetFactShapes.onResistance;
   const resistances = factFigures(device.facts?.onResistance, figure, at);
