@@ -94,10 +94,9 @@ export const smoothChannel: Channel = {
     const ut = derived[at + THERMAL_VOLTAGE]!;
     pinchOff(derived, at, vgs + vsb);
     const inversionCoefficient = softplus((pinch[0]! - vsb) / (2 * ut)) ** 2;
-    const threshold =
-      isZero(derived[at + BODY_FACTOR]!)
-        ? derived[at + THRESHOLD]! + (derived[at + SLOPE_FACTOR]! - 1) * vsb // where V_P = V_S
-        : bodyThreshold(derived, at, vsb);
+    const threshold = isZero(derived[at + BODY_FACTOR]!)
+      ? derived[at + THRESHOLD]! + (derived[at + SLOPE_FACTOR]! - 1) * vsb // where V_P = V_S
+      : bodyThreshold(derived, at, vsb);
     return {
       threshold,
       saturationVoltage: ut * (2 * Math.sqrt(inversionCoefficient + 0.25) + 3),

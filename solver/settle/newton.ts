@@ -24,6 +24,8 @@ export interface NewtonRun {
   first: Phase;
   maxIterations: number;
   shunt: Shunt | null;
+  /** Accept by rows and step, or, on the way of another method, by a step below 1e-6 alone. */
+  by: 'rows' | 'step';
   /** Counted up by one for each linear solution. */
   iterations: number;
   readonly residual: Residual;
@@ -41,6 +43,7 @@ export function newton(prepared: Prepared, run: NewtonRun): NewtonOutcome {
     assembleResidual(prepared);
     if (run.shunt) addShunt(prepared, run.shunt, false);
     if (settledStep && !work.limited) {
+      if (run.by === 'step') return 'accepted';
       measureRows(prepared, run.residual);
       if (run.residual.ratio <= 1) return 'accepted';
     }
@@ -59,33 +62,37 @@ export function newton(prepared: Prepared, run: NewtonRun): NewtonOutcome {
       return 'singular';
     }
     run.iterations++;
-    settledStep = takeStep(prepared) && !work.limited;
+    settledStep = takeStep(prepared, run.by === 'rows' ? 1 : LOOSE) && !work.limited;
     work.phase = Phase.limit;
   }
 }
 
-/** Moves the unknowns by the step in `residual`, limited. True where the step was small and not limited. */
-function takeStep({ x, residual, size, rowKinds, hull }: Prepared): boolean {
+/** By how much a step on the way of another method may be larger than the last step of all. */
+const LOOSE = 1000;
+
+/** Moves the unknowns by the step in `residual`, limited. True where the whole step was small. */
+function takeStep({ x, residual, size, rowKinds, hull }: Prepared, loose: number): boolean {
   let small = true;
   const nodeCount = hull.bound.length;
   for (let k = 0; k < size; k++) {
     const from = at(x, k);
     let step = at(residual, k);
     if (codeAt(rowKinds, k) === 0) {
-      if (Math.abs(step) > STEP_PART * Math.abs(from) + STEP_FLOOR_VOLTS) small = false;
+      if (Math.abs(step) > loose * (STEP_PART * Math.abs(from) + STEP_FLOOR_VOLTS)) small = false;
       const isFree = k + 1 >= nodeCount || codeAt(hull.pinned, k + 1) === 0;
       if (isFree) {
         step = Math.min(Math.max(step, -NODE_STEP), NODE_STEP);
         if (k + 1 < nodeCount && codeAt(hull.bound, k + 1) === 1)
           step = Math.min(Math.max(from + step, hull.low), hull.high) - from;
       }
-    } else if (Math.abs(step) > STEP_PART * Math.abs(from) + STEP_FLOOR_AMPERES) small = false;
+    } else if (Math.abs(step) > loose * (STEP_PART * Math.abs(from) + STEP_FLOOR_AMPERES)) small = false;
     x[k] = from + step;
   }
   return small;
 }
 
-function addShunt(prepared: Prepared, { conductance, anchor }: Shunt, toMatrix: boolean): void {
+/** Adds the shunt to the free nodes' rows, or to their diagonals. */
+export function addShunt(prepared: Prepared, { conductance, anchor }: Shunt, toMatrix: boolean): void {
   const { x, residual, diagonal, size, rowKinds, hull, system } = prepared;
   for (let k = 0; k < size; k++) {
     if (codeAt(rowKinds, k) === 1) continue;

@@ -7,14 +7,27 @@ import {
   DIRECT_BUDGET,
   GREATEST_CURRENT,
   HULL_MARGIN,
+  OTHER_BUDGET,
+  TIME_BUDGET,
   UNSET_MOVE,
 } from './limits.ts';
+import type { Effort } from './effort.ts';
 import { newton, type NewtonRun } from './newton.ts';
 import type { Prepared } from './prepared.ts';
+import { settleRamped } from './ramped.ts';
 import { hundredthLeak, refresh, wholeLeak } from './refresh.ts';
+import { settleTimed } from './timed.ts';
+import { settleTraced } from './traced.ts';
 import type { Method, Settlement, SettleOptions, SettleResult, Unsettled } from './settlement.ts';
 
-const everyMethod: readonly Method[] = ['direct'];
+const everyMethod: readonly Method[] = ['direct', 'timed', 'ramped', 'traced'];
+
+const ways: Record<Method, (prepared: Prepared, effort: Effort) => boolean> = {
+  direct: (prepared, { run }) => newton(prepared, run) === 'accepted',
+  timed: settleTimed,
+  ramped: settleRamped,
+  traced: settleTraced,
+};
 
 /** Finds the point at which the circuit rests at its present values. */
 export function settle(prepared: Prepared, options: SettleOptions): SettleResult {
@@ -34,16 +47,25 @@ export function settle(prepared: Prepared, options: SettleOptions): SettleResult
     first: options.start ? Phase.adopt : Phase.start,
     maxIterations: options.budget?.direct ?? DIRECT_BUDGET,
     shunt: null,
+    by: 'rows',
     iterations: 0,
     residual: { amperes: Infinity, ratio: Infinity },
     singularAt: -1,
   };
+  const effort: Effort = {
+    run,
+    stopAt: 0,
+    deadline: performance.now() + (options.budget?.time ?? TIME_BUDGET),
+    signal: options.signal,
+  };
   for (const method of options.methods ?? everyMethod) {
-    if (options.signal?.aborted)
-      return unsettled(run.iterations, { reason: 'cancelled', message: 'settling was cancelled' });
     if (options.start) x.set(options.start);
     else x.fill(0);
-    if (newton(prepared, run) !== 'accepted') continue;
+    effort.stopAt = run.iterations + (options.budget?.other ?? OTHER_BUDGET);
+    const found = ways[method](prepared, effort);
+    if (options.signal?.aborted)
+      return unsettled(run.iterations, { reason: 'cancelled', message: 'settling was cancelled' });
+    if (!found) continue;
     const beyond = beyondSense(prepared, run.iterations);
     if (beyond) return beyond;
     return settlementOf(prepared, options, method, run);
