@@ -83,3 +83,7 @@ export const misfitOf = (bound: Bound, stated: number, fitted: number): number =
   if (bound === 'at-least') return Math.min(percent, 0);
   return percent;
 };
+
+/** As a data sheet heads its columns. */
+export const gradeWord = (grade: Grade): string =>
+  ({ low: 'minimum', typical: 'typical', high: 'maximum' })[grade];

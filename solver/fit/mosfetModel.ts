@@ -1,6 +1,6 @@
 /**
  * What a data sheet's measurements come to for a MOSFET of given parameters, through the solver's own channel laws.
- * n-channel coordinates; SI units, temperatures in kelvin.
+ * n-channel coordinates, voltages of the pins, body at the source pin; SI units, temperatures in kelvin.
  */
 import { REFERENCE_TEMPERATURE } from '../elements/constants.ts';
 import { CHANNEL_SIZE, channelResult, deriveChannel, mosfetParameters } from '../elements/mosfet-channel.ts';
@@ -16,8 +16,9 @@ export interface ChannelParameters {
   readonly threshold: number;
   /** β, A/V². */
   readonly gainFactor: number;
-  /** In the drain lead, Ω; rises with (T/T0)^2.3. */
+  /** Ω; both rise with (T/T0)^2.3. */
   readonly drainResistance: number;
+  readonly sourceResistance: number;
   /** 1/V. */
   readonly lengthModulation: number;
   readonly slopeFactor: number;
@@ -32,7 +33,15 @@ const set = (name: (typeof mosfetParameters)[number], value: number) => {
   values[mosfetParameters.indexOf(name)] = value;
 };
 
-function prepare(channel: ChannelParameters, temperature: number): void {
+/** A device at a temperature, ready to be measured. Only the one prepared last may be measured. */
+interface Prepared {
+  /** Channel current at voltages inside the series resistances, A. */
+  readonly current: (gateToSource: number, drainToSource: number) => number;
+  readonly drain: number;
+  readonly source: number;
+}
+
+function prepare(law: MosfetLaw, channel: ChannelParameters, temperature: number): Prepared {
   set('polarity', 1);
   set('threshold', channel.threshold);
   set('gainFactor', channel.gainFactor);
@@ -42,20 +51,21 @@ function prepare(channel: ChannelParameters, temperature: number): void {
   set('slopeFactor', channel.slopeFactor);
   set('thresholdTemperatureCoefficient', channel.thresholdTemperatureCoefficient);
   deriveChannel(values, temperature, derived, 0);
+  const channelLaw = law === 'square' ? squareChannel : smoothChannel;
+  const rise = (temperature / REFERENCE_TEMPERATURE) ** 2.3;
+  const source = channel.sourceResistance * rise;
+  return {
+    // The drop at the source is counted into the gate voltage; on the body, at the source pin, it is too small to count.
+    current: (gateToSource, drainToSource) => {
+      channelLaw.evaluate(derived, 0, gateToSource, Math.max(drainToSource, 0), 0);
+      return channelResult[0] ?? 0;
+    },
+    drain: channel.drainResistance * rise,
+    source,
+  };
 }
 
-const lawOf = (law: MosfetLaw) => (law === 'square' ? squareChannel : smoothChannel);
-
-/** Evaluates the channel that was prepared last, body at the source; A. */
-function channelCurrent(law: MosfetLaw, gateToSource: number, drainToSource: number): number {
-  lawOf(law).evaluate(derived, 0, gateToSource, drainToSource, 0);
-  return channelResult[0] ?? 0;
-}
-
-const seriesAt = ({ drainResistance }: ChannelParameters, temperature: number) =>
-  drainResistance * (temperature / REFERENCE_TEMPERATURE) ** 2.3;
-
-/** Highest voltage across a channel that a measurement is thought to reach, V. */
+/** Highest voltage that a measurement is thought to reach, V. */
 const HIGHEST = 1e3;
 
 /**
@@ -69,17 +79,16 @@ export function onResistance(
   drainCurrent: number,
   temperature: number,
 ): number {
-  prepare(channel, temperature);
-  const series = seriesAt(channel, temperature);
-  const most = channelCurrent(law, gateToSource, HIGHEST);
-  if (!(most > drainCurrent)) return (HIGHEST / drainCurrent) * (drainCurrent / Math.max(most, 1e-300));
-  const across = findRoot((v) => channelCurrent(law, gateToSource, v) - drainCurrent, 0, HIGHEST) ?? HIGHEST;
-  return across / drainCurrent + series;
+  const { current, drain, source } = prepare(law, channel, temperature);
+  const gate = gateToSource - drainCurrent * source;
+  const most = current(gate, HIGHEST);
+  if (!(most > drainCurrent)) return HIGHEST / Math.max(most, 1e-300);
+  const across = findRoot((v) => current(gate, v) - drainCurrent, 0, HIGHEST) ?? HIGHEST;
+  return across / drainCurrent + drain + source;
 }
 
 /**
- * The V_T0 at which the channel carries `drainCurrent` at `gateToSource` and `drainToSource` (of the pins), V; undefined
- * where none does.
+ * The V_T0 at which the device carries `drainCurrent` at these voltages, V; undefined where none does.
  */
 export function thresholdFor(
   law: MosfetLaw,
@@ -89,11 +98,10 @@ export function thresholdFor(
   drainCurrent: number,
   temperature: number,
 ): number | undefined {
-  const inside = drainToSource - drainCurrent * seriesAt({ ...channel, threshold: 0 }, temperature);
-  if (!(inside > 0)) return undefined;
   const excess = (threshold: number) => {
-    prepare({ ...channel, threshold }, temperature);
-    return channelCurrent(law, gateToSource, inside) - drainCurrent;
+    const { current, drain, source } = prepare(law, { ...channel, threshold }, temperature);
+    const gate = gateToSource - drainCurrent * source;
+    return current(gate, drainToSource - drainCurrent * (drain + source)) - drainCurrent;
   };
   return findRoot(excess, gateToSource - 200, gateToSource + 20);
 }
@@ -105,12 +113,12 @@ export function diodeConnectedVoltage(
   drainCurrent: number,
   temperature: number,
 ): number | undefined {
-  prepare(channel, temperature);
-  const drop = drainCurrent * seriesAt(channel, temperature);
-  return findRoot((v) => channelCurrent(law, v, Math.max(v - drop, 0)) - drainCurrent, 0, HIGHEST);
+  const { current, drain, source } = prepare(law, channel, temperature);
+  const atGate = drainCurrent * source;
+  return findRoot((v) => current(v - atGate, v - atGate - drainCurrent * drain) - drainCurrent, 0, HIGHEST);
 }
 
-/** V_GS at which the device carries `drainCurrent` at `drainToSource` of the pins, V. */
+/** V_GS at which the device carries `drainCurrent` at `drainToSource`, V. */
 export function gateVoltageFor(
   law: MosfetLaw,
   channel: ChannelParameters,
@@ -118,13 +126,14 @@ export function gateVoltageFor(
   drainCurrent: number,
   temperature: number,
 ): number | undefined {
-  prepare(channel, temperature);
-  const inside = drainToSource - drainCurrent * seriesAt(channel, temperature);
+  const { current, drain, source } = prepare(law, channel, temperature);
+  const inside = drainToSource - drainCurrent * (drain + source);
   if (!(inside > 0)) return undefined;
-  return findRoot((v) => channelCurrent(law, v, inside) - drainCurrent, -HIGHEST, HIGHEST);
+  const gate = findRoot((v) => current(v, inside) - drainCurrent, -HIGHEST, HIGHEST);
+  return gate === undefined ? undefined : gate + drainCurrent * source;
 }
 
-/** g_fs = ∂I_D/∂V_GS of the pins at a drain voltage and current, S. */
+/** g_fs = ∂I_D/∂V_GS at a drain voltage and current, S. */
 export function forwardTransconductance(
   law: MosfetLaw,
   channel: ChannelParameters,
@@ -134,11 +143,11 @@ export function forwardTransconductance(
 ): number | undefined {
   const gate = gateVoltageFor(law, channel, drainToSource, drainCurrent, temperature);
   if (gate === undefined) return undefined;
-  const series = seriesAt(channel, temperature);
-  channelCurrent(law, gate, drainToSource - drainCurrent * series);
+  const { current, drain, source } = prepare(law, channel, temperature);
+  current(gate - drainCurrent * source, drainToSource - drainCurrent * (drain + source));
   const [, toGate = 0, toDrain = 0] = channelResult;
-  // The drain's own resistance takes part of the drain voltage as the current rises.
-  return toGate / (1 + toDrain * series);
+  // As the current rises, the source takes of the gate voltage and both resistances of the drain voltage.
+  return toGate / (1 + toGate * source + toDrain * (drain + source));
 }
 
 /** I_D at V_GS = 0, A. */
@@ -148,11 +157,9 @@ export function zeroBiasCurrent(
   drainToSource: number,
   temperature: number,
 ): number {
-  prepare(channel, temperature);
-  const series = seriesAt(channel, temperature);
-  const most = channelCurrent(law, 0, drainToSource);
-  if (series === 0 || most === 0) return most;
-  const carried = (current: number) =>
-    channelCurrent(law, 0, Math.max(drainToSource - current * series, 0)) - current;
-  return findRoot(carried, 0, most) ?? most;
+  const { current, drain, source } = prepare(law, channel, temperature);
+  const most = current(0, drainToSource);
+  if (drain + source === 0 || most === 0) return most;
+  const excess = (i: number) => current(-i * source, drainToSource - i * (drain + source)) - i;
+  return findRoot(excess, 0, most) ?? most;
 }
