@@ -5,15 +5,7 @@ import { bipolarReserve } from './duty/conduct.ts';
 import type { PartDuty } from './duty/partDuty.ts';
 import type { Point } from './point.ts';
 import { junctionTemperature } from './ratings.ts';
-import type {
-  BipolarReading,
-  DutyReading,
-  Figure,
-  MosfetReading,
-  OtherReading,
-  PartReading,
-  TwoPinReading,
-} from './readings.ts';
+import type { BipolarReading, DutyReading, Figure, MosfetReading, PartReading } from './readings.ts';
 
 /** −0 is 0 to whoever reads it. */
 export const plain = (value: number): number => value + 0;
@@ -88,7 +80,7 @@ export const readPart = (
   if (Object.keys(figures).length === 0) return null;
   const own = { id: part.id, kind: part.part.kind };
   const ambient = compiled.conditions.ambient.nominal;
-  const temperature = junction(duty, ambient, figures['power']);
+  const temperature = junction(duty, ambient, figures.power);
   switch (readout.shape) {
     case 'mosfet':
       return { ...own, ...figures, junctionTemperature: temperature, ...judged } as unknown as MosfetReading;
@@ -106,11 +98,11 @@ export const readPart = (
       } as unknown as BipolarReading;
     }
     case 'diode':
-      return { ...own, ...figures, junctionTemperature: temperature } as unknown as TwoPinReading;
+      return { ...own, ...figures, junctionTemperature: temperature };
     case 'two-pin':
     case 'supply':
-      return { ...own, ...figures } as unknown as TwoPinReading;
+      return { ...own, ...figures };
     case 'other':
-      return { ...own, ...figures } as OtherReading;
+      return { ...own, ...figures };
   }
 };

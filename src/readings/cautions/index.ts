@@ -1,15 +1,26 @@
-import type { CompiledStage } from '../compile.ts';
-import type { PartDuty } from '../duty/partDuty.ts';
-import type { Point } from '../point.ts';
-import type { Notice, PartReading } from '../readings.ts';
+import type { Notice } from '../readings.ts';
+import { unfusedBattery } from './battery.ts';
+import { bodyDiodeOnly } from './bodyDiode.ts';
+import { noClamp } from './clamp.ts';
+import { hotSurface } from './heat.ts';
+import { liveLoad } from './liveLoad.ts';
+import { passedRatings } from './ratings.ts';
+import type { Caution, Settled } from './settled.ts';
+import { storedEnergy } from './storedEnergy.ts';
+import { dangerousVoltage } from './voltage.ts';
 
-/** A settled state as the cautions look at it. */
-export interface Settled {
-  readonly compiled: CompiledStage;
-  readonly duties: ReadonlyMap<string, PartDuty>;
-  readonly point: Point;
-  readonly parts: Readonly<Record<string, PartReading>>;
-}
+/** The gravest first. */
+const cautions: readonly Caution[] = [
+  dangerousVoltage,
+  passedRatings,
+  noClamp,
+  bodyDiodeOnly,
+  storedEnergy,
+  hotSurface,
+  liveLoad,
+  unfusedBattery,
+];
 
-/** What could hurt a person or a part. */
-export const cautionsOf = (_settled: Settled): readonly Notice[] => [];
+/** What could hurt a person or a part in a settled state. */
+export const cautionsOf = (settled: Settled): readonly Notice[] =>
+  cautions.flatMap((caution) => caution(settled));

@@ -84,7 +84,7 @@ export const partDuty = (part: CompiledPart, ambient: number): PartDuty | null =
   const { principal, device } = part;
   if (principal === null) return null;
   if (device !== undefined) return ofDevice(part, principal, device, ambient);
-  const rating = part.part.values?.['rating'] as PlainValue | undefined;
+  const rating = part.part.values?.rating as PlainValue | undefined;
   if (rating === undefined) return null;
   return {
     part,
