@@ -4,15 +4,17 @@
  * a figure that is a bound counts only where it is passed). The typical part and the two extreme parts are fitted alike.
  */
 import { REFERENCE_TEMPERATURE } from '../elements/constants.ts';
+import { conflictsOf } from './conflicts.ts';
 import type { Fact, FitReport, FitResult, FreeParameter, Grade } from './fact.ts';
 import { grades, gradeWord } from './fact.ts';
 import { fitJunction, forwardTargets } from './junctionFit.ts';
+import { forwardComparisons, freeOfJunction, withoutCurrent } from './junctionReport.ts';
 import type { Attempt, MosfetDefaults } from './mosfetChannelFit.ts';
 import { fitChannel, startChannel, thresholdOf } from './mosfetChannelFit.ts';
 import type { ChannelParameters, MosfetLaw } from './mosfetModel.ts';
 import { onResistance } from './mosfetModel.ts';
 import type { FittedMosfet } from './mosfetReport.ts';
-import { comparisonsOf, conflictsOf, diodeComparisons, thresholdComparisons } from './mosfetReport.ts';
+import { comparisonsOf, thresholdComparisons } from './mosfetReport.ts';
 import type { Measured, MosfetFacts } from './mosfetTargets.ts';
 import { measuredFacts, SMALL_CURRENT, targetsOf } from './mosfetTargets.ts';
 
@@ -47,26 +49,19 @@ export function fitMosfet(
   }
   const free = [...fit.free];
   const parts = recordOf((grade): FittedMosfet => {
-    const { junction, determined } = fitJunction(
-      forwardTargets(facts.bodyDiodeForward, grade, 'bound'),
-      defaults.bodyDiode,
-    );
-    for (const parameter of ['saturationCurrent', 'emissionCoefficient', 'seriesResistance'] as const) {
-      if (!determined.includes(parameter)) {
-        free.push({
-          parameter: `bodyDiode.${parameter}`,
-          grade,
-          value: junction[parameter],
-          reason: 'the facts of the body diode do not determine it',
-        });
-      }
-    }
-    return { ...fit.channels[grade], bodyDiode: junction };
+    const bodyDiode = fitJunction(forwardTargets(facts.bodyDiodeForward, grade, 'bound'), defaults.bodyDiode);
+    if (grade === 'typical') free.push(...freeOfJunction(bodyDiode, grade, 'bodyDiode.'));
+    return { ...fit.channels[grade], bodyDiode: bodyDiode.junction };
   });
   const comparisons = [
     ...thresholdComparisons(facts, law, threshold, parts),
     ...comparisonsOf(facts, measured, parts),
-    ...diodeComparisons(facts, parts),
+    ...forwardComparisons(
+      'bodyDiodeForward',
+      facts.bodyDiodeForward,
+      (grade) => parts[grade].bodyDiode,
+      'bound',
+    ),
   ];
   const [first] = facts.onResistance;
   const hotGate = first?.at.gateToSource ?? (facts.mode === 'depletion' ? 0 : undefined);
@@ -76,7 +71,12 @@ export function fitMosfet(
     fit: {
       law,
       parts,
-      report: { comparisons, free, conflicts: conflictsOf(comparisons), unused },
+      report: {
+        comparisons,
+        free,
+        conflicts: conflictsOf(comparisons),
+        unused: [...unused, ...withoutCurrent('bodyDiodeForward', facts.bodyDiodeForward)],
+      },
       hotOnResistanceRatio:
         first === undefined || hotGate === undefined
           ? undefined

@@ -1,8 +1,7 @@
 /** Every stated figure of a MOSFET beside what the fitted parts give for it. */
-import type { Comparison, Conflict, Fact, Grade } from './fact.ts';
-import { gradeWord, grades, misfitOf } from './fact.ts';
+import type { Comparison, Fact, Grade } from './fact.ts';
+import { grades, misfitOf } from './fact.ts';
 import type { JunctionParameters } from './junctionFit.ts';
-import { forwardTargets, forwardVoltage } from './junctionFit.ts';
 import type { ChannelParameters, MosfetLaw } from './mosfetModel.ts';
 import type { Measured, MosfetFacts } from './mosfetTargets.ts';
 import { endOf, gateThreshold, isSoleMinimum, USUAL_TEST_CURRENT } from './mosfetTargets.ts';
@@ -11,8 +10,6 @@ export interface FittedMosfet extends ChannelParameters {
   readonly bodyDiode: JunctionParameters;
 }
 
-/** Misfit above which facts are said to be in conflict, percent. */
-const CONFLICT = 1;
 export function thresholdComparisons(
   facts: MosfetFacts,
   law: MosfetLaw,
@@ -65,44 +62,4 @@ export function comparisonsOf(
       ];
     }),
   );
-}
-
-export function diodeComparisons(
-  facts: MosfetFacts,
-  parts: Readonly<Record<Grade, FittedMosfet>>,
-): readonly Comparison[] {
-  return grades.flatMap((grade) =>
-    forwardTargets(facts.bodyDiodeForward, grade, 'bound')
-      .filter(({ figure }) => figure === grade)
-      .map(({ index, figure, bound, stated, current, temperature }): Comparison => {
-        const fitted = forwardVoltage(parts[grade].bodyDiode, current, temperature);
-        return {
-          fact: 'bodyDiodeForward',
-          index,
-          figure,
-          grade,
-          bound,
-          stated,
-          fitted,
-          misfit: misfitOf(bound, stated, fitted),
-        };
-      }),
-  );
-}
-
-/** Where a grade misses figures, those figures cannot be had together. */
-export function conflictsOf(comparisons: readonly Comparison[]): readonly Conflict[] {
-  return grades.flatMap((grade) => {
-    const missed = comparisons.filter((entry) => entry.grade === grade && Math.abs(entry.misfit) > CONFLICT);
-    if (missed.length === 0) return [];
-    return [
-      {
-        facts: [...new Set(missed.map(({ fact }) => fact))],
-        grade,
-        reason: `no ${gradeWord(grade)} part of this law meets them all: the fitted one misses by up to ${Math.max(
-          ...missed.map(({ misfit }) => Math.abs(misfit)),
-        ).toPrecision(2)} %`,
-      },
-    ];
-  });
 }
