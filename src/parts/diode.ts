@@ -4,7 +4,7 @@ import { symbols } from '../../symbols/index.ts';
 import { formatStated } from '../values/value-text.ts';
 import { definePart } from './definePart.ts';
 import { deviceOf, titleLine } from './deviceOf.ts';
-import { diodeAssumptions, diodeDraws } from './devices/diodeDraws.ts';
+import { diodeAssumptions, diodeDraws, diodeGrades } from './devices/diodeDraws.ts';
 import { diodeFromFigures, zenerFromFigures } from './devices/diodeParameters.ts';
 import type { PartContext } from './kind.ts';
 import { readTwoPins } from './readTwoPin.ts';
@@ -62,10 +62,12 @@ export const diode = definePart({
   elements: (context) => {
     const { name, node, figures } = context;
     const nodes = [node('anode'), node('cathode')] as const;
+    const device = deviceOfPart(context);
+    const grades = diodeGrades(device);
     return [
-      deviceOfPart(context).type === 'zener'
-        ? zener(name, nodes, zenerFromFigures(figures))
-        : junction(name, nodes, diodeFromFigures(figures)),
+      device.type === 'zener'
+        ? zener(name, nodes, zenerFromFigures(figures, grades))
+        : junction(name, nodes, diodeFromFigures(figures, grades)),
     ];
   },
   readout: (context) => {

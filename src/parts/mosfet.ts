@@ -4,6 +4,7 @@ import { symbols } from '../../symbols/index.ts';
 import { formatStated } from '../values/value-text.ts';
 import { definePart } from './definePart.ts';
 import { deviceOf, titleLine } from './deviceOf.ts';
+import { mosfetFit } from './devices/fitting.ts';
 import { mosfetAssumptions, mosfetDraws } from './devices/mosfetDraws.ts';
 import { mosfetFromFigures } from './devices/mosfetParameters.ts';
 import type { MosfetDevice } from './devices/mosfetSchema.ts';
@@ -120,10 +121,12 @@ export const mosfet = definePart({
   assumptions: (context, law) => mosfetAssumptions(deviceOfPart(context), law),
   elements: (context) => {
     const { name, node, figures, law } = context;
+    const device = deviceOfPart(context);
+    const fit = device.model === undefined ? mosfetFit(device, law) : undefined;
     const channel = element(
       name,
       [node('drain'), node('gate'), node('source'), bodyNode(context)],
-      mosfetFromFigures(deviceOfPart(context), figures, law),
+      mosfetFromFigures(device, figures, law, fit?.ok === true ? fit.value : undefined),
     );
     const { gateLeakage } = figures;
     if (gateLeakage === undefined) return [channel];

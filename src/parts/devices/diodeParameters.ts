@@ -1,9 +1,11 @@
 /** Parameters of diodes, LEDs and Zeners at 25 °C, with the defaults of common practice. */
 import { SILICON_BAND_GAP } from '../../../solver/index.ts';
 import type { DiodeParameters, ZenerParameters } from '../../../solver/index.ts';
+import type { DiodeFit, JunctionParameters } from '../../../solver/fit/index.ts';
 import type { Figures } from '../kind.ts';
 import { figure } from '../values.ts';
 import type { DiodeDevice, LedDevice, ZenerDevice } from './diodeSchema.ts';
+import { geometric, gradeKey, linear, scaledBy } from './grade.ts';
 import type { Parameter } from './parameter.ts';
 
 /** Change of an LED's forward voltage where neither band gap nor coefficient is stated, V/K (common practice). */
@@ -74,7 +76,8 @@ export const zenerParameters: readonly Parameter[] = [
   },
 ];
 
-export const diodeFromFigures = (figures: Figures): DiodeParameters => {
+export const diodeFromFigures = (atHand: Figures, fit?: DiodeFit): DiodeParameters => {
+  const figures = fit === undefined ? atHand : { ...atHand, ...atGrade(atHand, fit) };
   const { bandGap, forwardTemperatureCoefficient, coefficientCurrent } = figures;
   return {
     saturationCurrent: figure(figures, 'saturationCurrent'),
@@ -86,10 +89,24 @@ export const diodeFromFigures = (figures: Figures): DiodeParameters => {
   };
 };
 
-export const zenerFromFigures = (figures: Figures): ZenerParameters => ({
-  ...diodeFromFigures(figures),
+export const zenerFromFigures = (figures: Figures, fit?: DiodeFit): ZenerParameters => ({
+  ...diodeFromFigures(figures, fit),
   breakdownVoltage: figure(figures, 'breakdownVoltage'),
   breakdownCurrent: figure(figures, 'breakdownCurrent'),
   breakdownResistance: figure(figures, 'breakdownResistance'),
   breakdownTemperatureCoefficient: figure(figures, 'breakdownTemperatureCoefficient'),
 });
+
+/** What was fitted, for the grade at hand, moved as the figures at hand are moved from those of the typical part. */
+const atGrade = (figures: Figures, { parts }: DiodeFit): Figures => {
+  const grade = figure(figures, gradeKey);
+  const moved = (key: Exclude<keyof JunctionParameters, 'bandGap'>, between: typeof linear) => {
+    const three = { low: parts.low[key], typical: parts.typical[key], high: parts.high[key] };
+    return scaledBy(between(three, grade), figure(figures, key), three.typical);
+  };
+  return {
+    saturationCurrent: moved('saturationCurrent', geometric),
+    emissionCoefficient: moved('emissionCoefficient', linear),
+    seriesResistance: moved('seriesResistance', linear),
+  };
+};

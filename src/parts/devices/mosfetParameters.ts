@@ -1,8 +1,10 @@
 /** A MOSFET's parameters at 25 °C, with the defaults of common practice, from its device and its own width and length. */
 import { DISCRETE_SATURATION_CURRENT, INTEGRATED_SATURATION_CURRENT } from '../../../solver/index.ts';
 import type { MosfetParameters } from '../../../solver/index.ts';
+import type { FittedMosfet, MosfetFit } from '../../../solver/fit/index.ts';
 import type { Figures, Law } from '../kind.ts';
 import { figure } from '../values.ts';
+import { geometric, gradeKey, linear, scaledBy } from './grade.ts';
 import type { MosfetDevice } from './mosfetSchema.ts';
 import type { Fallback, Parameter } from './parameter.ts';
 
@@ -11,7 +13,7 @@ export const polarityOf = (device: MosfetDevice): 1 | -1 => (device.channel === 
 const isIntegrated = (device: MosfetDevice) => device.build === 'integrated';
 
 /** Change of the threshold, V/K: common practice for a discrete part, and on a chip. */
-const thresholdCoefficient = (device: MosfetDevice): Fallback => {
+export const thresholdCoefficient = (device: MosfetDevice): Fallback => {
   const sign = polarityOf(device);
   if (isIntegrated(device)) {
     return {
@@ -28,7 +30,7 @@ const thresholdCoefficient = (device: MosfetDevice): Fallback => {
   };
 };
 
-const saturationCurrent = (device: MosfetDevice): Fallback =>
+export const bodySaturationCurrent = (device: MosfetDevice): Fallback =>
   isIntegrated(device)
     ? {
         value: INTEGRATED_SATURATION_CURRENT,
@@ -44,7 +46,7 @@ export const bodyDiodeParameters = (device: MosfetDevice): readonly Parameter[] 
     key: 'bodyDiode.saturationCurrent',
     label: 'saturation current of the body diode',
     quantity: 'saturationCurrent',
-    fallback: saturationCurrent(device),
+    fallback: bodySaturationCurrent(device),
   },
   {
     key: 'bodyDiode.emissionCoefficient',
@@ -123,7 +125,13 @@ export const modelParameters = (device: MosfetDevice, law: Law): readonly Parame
 ];
 
 /** What the solver is told, from the numbers at hand. */
-export const mosfetFromFigures = (device: MosfetDevice, figures: Figures, law: Law): MosfetParameters => {
+export const mosfetFromFigures = (
+  device: MosfetDevice,
+  atHand: Figures,
+  law: Law,
+  fit?: MosfetFit,
+): MosfetParameters => {
+  const figures = fit === undefined ? atHand : { ...atHand, ...atGrade(device, atHand, fit) };
   const gainFactor =
     figures.gainFactor ??
     (figure(figures, 'processTransconductance') * figure(figures, 'width')) / figure(figures, 'length');
@@ -144,5 +152,52 @@ export const mosfetFromFigures = (device: MosfetDevice, figures: Figures, law: L
       emissionCoefficient: figure(figures, 'bodyDiode.emissionCoefficient'),
       seriesResistance: figure(figures, 'bodyDiode.seriesResistance'),
     },
+  };
+};
+
+/** What was fitted, for the grade at hand, moved as the figures at hand are moved from those of the typical part. */
+const atGrade = (device: MosfetDevice, figures: Figures, { parts }: MosfetFit): Figures => {
+  const grade = figure(figures, gradeKey);
+  const of = (value: (part: FittedMosfet) => number) => ({
+    low: value(parts.low),
+    typical: value(parts.typical),
+    high: value(parts.high),
+  });
+  const sign = polarityOf(device);
+  const threshold = of((part) => part.threshold);
+  const moved = (key: string, three: ReturnType<typeof of>, between: typeof linear) =>
+    scaledBy(between(three, grade), figure(figures, key), three.typical);
+  return {
+    threshold: sign * (linear(threshold, grade) - threshold.typical) + figure(figures, 'threshold'),
+    gainFactor: moved(
+      'gainFactor',
+      of((part) => part.gainFactor),
+      geometric,
+    ),
+    drainResistance: moved(
+      'drainResistance',
+      of((part) => part.drainResistance),
+      linear,
+    ),
+    sourceResistance: moved(
+      'sourceResistance',
+      of((part) => part.sourceResistance),
+      linear,
+    ),
+    'bodyDiode.saturationCurrent': moved(
+      'bodyDiode.saturationCurrent',
+      of((part) => part.bodyDiode.saturationCurrent),
+      geometric,
+    ),
+    'bodyDiode.emissionCoefficient': moved(
+      'bodyDiode.emissionCoefficient',
+      of((part) => part.bodyDiode.emissionCoefficient),
+      linear,
+    ),
+    'bodyDiode.seriesResistance': moved(
+      'bodyDiode.seriesResistance',
+      of((part) => part.bodyDiode.seriesResistance),
+      linear,
+    ),
   };
 };
