@@ -51,6 +51,7 @@ export const idealAmplifierLaw: ElementLaw<AmplifierOperating> = {
     [3, 2],
   ],
   senses: [0, 1],
+  lags: [[3, 2]],
   derivedSize: 2,
   memorySize: 0,
   paths: () => [{ kind: 'driven', from: 2, to: REFERENCE, ideal: true }],
@@ -95,6 +96,7 @@ export const suppliedAmplifierLaw: ElementLaw<AmplifierOperating> = {
     [5, 4],
   ],
   senses: [0, 1],
+  lags: [[5, 2]],
   derivedSize: 3,
   memorySize: 0,
   paths: () => [

@@ -20,6 +20,11 @@ export interface ElementLaw<Operating = unknown> {
   readonly pattern: readonly LocalEntry[];
   /** Terminals that sense a potential and take no direct current: gates, amplifier inputs. */
   readonly senses: readonly number[];
+  /**
+   * Outputs with a pole of their own, as the pattern's (branch row, output) entry: in a pseudo-transient the row
+   * gains a lag on that output. Absent where there is none.
+   */
+  readonly lags?: readonly LocalEntry[];
   /** Places in `Workspace.derived`: what `derive` works out once per settle. */
   readonly derivedSize: number;
   /** Places in `Workspace.memory`: what limiting remembers from one evaluation to the next. */

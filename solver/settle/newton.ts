@@ -7,7 +7,7 @@ import { Phase } from '../elements/law.ts';
 import { measureRows, type Residual } from './accept.ts';
 import { assembleMatrix, assembleResidual, loadElements } from './evaluate.ts';
 import { NODE_STEP, STEP_FLOOR_AMPERES, STEP_FLOOR_VOLTS, STEP_PART } from './limits.ts';
-import type { Prepared } from './prepared.ts';
+import { UnknownKind, type Prepared } from './prepared.ts';
 
 export type NewtonOutcome = 'accepted' | 'iterations' | 'singular';
 
@@ -17,6 +17,8 @@ export interface Shunt {
   conductance: number;
   /** V; length `size`. */
   readonly anchor: Float64Array;
+  /** Weight of the same on amplifier outputs, V/V. */
+  lag: number;
 }
 
 export interface NewtonRun {
@@ -71,35 +73,39 @@ export function newton(prepared: Prepared, run: NewtonRun): NewtonOutcome {
 const LOOSE = 1000;
 
 /** Moves the unknowns by the step in `residual`, limited. True where the whole step was small. */
-function takeStep({ x, residual, size, rowKinds, hull }: Prepared, loose: number): boolean {
+function takeStep({ x, residual, size, kinds, hull }: Prepared, loose: number): boolean {
   let small = true;
-  const nodeCount = hull.bound.length;
   for (let k = 0; k < size; k++) {
     const from = at(x, k);
+    const kind = codeAt(kinds, k);
+    const floor = kind === UnknownKind.branch ? STEP_FLOOR_AMPERES : STEP_FLOOR_VOLTS;
     let step = at(residual, k);
-    if (codeAt(rowKinds, k) === 0) {
-      if (Math.abs(step) > loose * (STEP_PART * Math.abs(from) + STEP_FLOOR_VOLTS)) small = false;
-      const isFree = k + 1 >= nodeCount || codeAt(hull.pinned, k + 1) === 0;
-      if (isFree) {
-        step = Math.min(Math.max(step, -NODE_STEP), NODE_STEP);
-        if (k + 1 < nodeCount && codeAt(hull.bound, k + 1) === 1)
-          step = Math.min(Math.max(from + step, hull.low), hull.high) - from;
-      }
-    } else if (Math.abs(step) > loose * (STEP_PART * Math.abs(from) + STEP_FLOOR_AMPERES)) small = false;
+    if (!(Math.abs(step) <= loose * (STEP_PART * Math.abs(from) + floor))) small = false;
+    if (kind === UnknownKind.bound) {
+      step = Math.min(Math.max(step, -NODE_STEP), NODE_STEP);
+      step = Math.min(Math.max(from + step, hull.low), hull.high) - from;
+    } else if (kind === UnknownKind.loose) {
+      const cap = Math.max(NODE_STEP, Math.abs(from));
+      step = Math.min(Math.max(step, -cap), cap);
+    }
     x[k] = from + step;
   }
   return small;
 }
 
 /** Adds the shunt to the free nodes' rows, or to their diagonals. */
-export function addShunt(prepared: Prepared, { conductance, anchor }: Shunt, toMatrix: boolean): void {
-  const { x, residual, diagonal, size, rowKinds, hull, system } = prepared;
+export function addShunt(prepared: Prepared, { conductance, anchor, lag }: Shunt, toMatrix: boolean): void {
+  const { x, residual, diagonal, size, kinds, system, lags } = prepared;
   for (let k = 0; k < size; k++) {
-    if (codeAt(rowKinds, k) === 1) continue;
-    if (k + 1 < hull.pinned.length && codeAt(hull.pinned, k + 1) === 1) continue;
+    if (codeAt(kinds, k) < UnknownKind.bound) continue;
     if (toMatrix) {
       const slot = indexAt(diagonal, k);
       system.values[slot] = at(system.values, slot) + conductance;
     } else residual[k] = at(residual, k) + conductance * (at(x, k) - at(anchor, k));
   }
+  if (lag > 0)
+    for (const { row, output, slot } of lags) {
+      if (toMatrix) system.values[slot] = at(system.values, slot) + lag;
+      else residual[row] = at(residual, row) + lag * (at(x, output) - at(anchor, output));
+    }
 }

@@ -3,7 +3,19 @@ import type { Circuit, Element } from '../circuit.ts';
 import { Phase, type Batch, type ElementLaw, type Workspace } from '../elements/law.ts';
 import { createLinearSystem, type LinearSystem } from '../matrix/linearSystem.ts';
 import { createPattern, type EntryPlace } from '../matrix/pattern.ts';
-import { findHull, type Hull } from '../structure/hull.ts';
+import { emptyHull, type Hull } from '../structure/hull.ts';
+
+/** What an unknown is, and so how its step is limited. */
+export const UnknownKind = {
+  /** Current of a branch; its row is in volts. All others are voltages, their rows currents. */
+  branch: 0,
+  /** A node that voltage sources alone hold: goes where it must at once. */
+  pinned: 1,
+  /** A node that cannot leave the hull of the rails. */
+  bound: 2,
+  /** A node that forced or driven currents reach: it may have far to go. */
+  loose: 3,
+} as const;
 
 /** First places of one element in the arrays of the workspace. */
 export interface ElementPlace {
@@ -26,8 +38,8 @@ export interface Prepared {
   readonly circuit: Circuit;
   /** Number of unknowns, which is also the reference's place in `x` and `residual`. */
   readonly size: number;
-  /** 0 where the row is a current (A), 1 where it is a branch (V); length `size`. */
-  readonly rowKinds: Uint8Array;
+  /** What each unknown is, as `UnknownKind`; length `size`. Kinds of nodes follow the values of the sources. */
+  readonly kinds: Uint8Array;
   /** For messages; length `size`. */
   readonly unknownNames: readonly string[];
   readonly places: readonly ElementPlace[];
@@ -44,6 +56,8 @@ export interface Prepared {
   readonly entryColumns: Int32Array;
   /** Slot of each unknown's diagonal; length `size`. */
   readonly diagonal: Int32Array;
+  /** Outputs with a pole of their own: branch row, output and the slot where they meet. */
+  readonly lags: readonly { readonly row: number; readonly output: number; readonly slot: number }[];
 
   // --- The point at hand ---
   readonly system: LinearSystem;
@@ -83,6 +97,7 @@ export function layOut(circuit: Circuit): Prepared {
   const gather: number[] = [];
   const entryRows: number[] = [];
   const entryColumns: number[] = [];
+  const lagging: EntryPlace[] = [];
   let derived = 0;
   let memory = 0;
   let value = 0;
@@ -102,6 +117,7 @@ export function layOut(circuit: Circuit): Prepared {
         entryRows.push(local[row] ?? -1);
         entryColumns.push(local[column] ?? -1);
       }
+      for (const [row, column] of law.lags ?? []) lagging.push([local[row] ?? -1, local[column] ?? -1]);
       derived += law.derivedSize;
       memory += law.memorySize;
       value += element.values.length;
@@ -126,7 +142,7 @@ export function layOut(circuit: Circuit): Prepared {
   return {
     circuit,
     size,
-    rowKinds: Uint8Array.from(rowKinds),
+    kinds: Uint8Array.from(rowKinds, (kind) => (kind === 1 ? UnknownKind.branch : UnknownKind.bound)),
     unknownNames,
     places: byIndex,
     placeOf: new Map(byIndex.map((place) => [place.element, place])),
@@ -137,6 +153,9 @@ export function layOut(circuit: Circuit): Prepared {
     entryColumns: Int32Array.from(entryColumns, orReference),
     diagonal: Int32Array.from(rowKinds, (kind, row) =>
       kind === 0 ? pattern.slotOf(row, row) : pattern.entryCount,
+    ),
+    lags: lagging.flatMap(([row, output]) =>
+      output < 0 ? [] : [{ row, output, slot: pattern.slotOf(row, output) }],
     ),
     system,
     work: {
@@ -154,7 +173,7 @@ export function layOut(circuit: Circuit): Prepared {
     residual: new Float64Array(size + 1),
     magnitude: new Float64Array(size + 1),
     rounding: new Float64Array(size + 1),
-    hull: findHull(circuit, nodeCount),
+    hull: emptyHull(nodeCount),
     seenValues: new Float64Array(value).fill(NaN),
     seenTemperatures: new Float64Array(places.length).fill(NaN),
     seenLeaks: new Float64Array(places.length).fill(NaN),

@@ -1,8 +1,8 @@
 /** Works out anew what depends on values and temperature, where these changed since the last time. */
-import { at } from '../elements/at.ts';
+import { at, codeAt, indexAt } from '../elements/at.ts';
 import { DECLARED_LEAK } from '../elements/constants.ts';
 import { updateHull } from '../structure/hull.ts';
-import type { Prepared } from './prepared.ts';
+import { UnknownKind, type Prepared } from './prepared.ts';
 import type { SettleOptions } from './settlement.ts';
 
 /** Part of the declared leak by element. */
@@ -45,6 +45,25 @@ export function refresh(prepared: Prepared, options: SettleOptions, leakScale: L
         return e;
       }
   }
-  if (changed) updateHull(prepared.circuit, prepared.hull);
+  if (changed) updateKinds(prepared);
   return null;
+}
+
+/** Works out the hull and from it the kind of every node. */
+function updateKinds({ circuit, hull, kinds, places, gather }: Prepared): void {
+  updateHull(circuit, hull);
+  for (let node = 1; node < hull.bound.length; node++)
+    kinds[node - 1] =
+      codeAt(hull.pinned, node) === 1
+        ? UnknownKind.pinned
+        : codeAt(hull.bound, node) === 1
+          ? UnknownKind.bound
+          : UnknownKind.loose;
+  // An internal node is as free as the freest of the element's terminals.
+  for (const { element, unknown } of places) {
+    const { terminals, internals } = element.law;
+    const loose = element.nodes.some((node) => node > 0 && kinds[node - 1] === UnknownKind.loose);
+    for (let k = 0; k < internals.length; k++)
+      kinds[indexAt(gather, unknown + terminals.length + k)] = loose ? UnknownKind.loose : UnknownKind.bound;
+  }
 }

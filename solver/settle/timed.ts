@@ -9,6 +9,8 @@ import type { Prepared } from './prepared.ts';
 /** C/Δt of the first step, S, and that at which the rest is left to Newton. */
 const FIRST_CONDUCTANCE = 1;
 const LAST_CONDUCTANCE = 1e-13;
+/** τ/Δt of an amplifier's output for each siemens of C/Δt: slow beside every gain at first, then at rest before the nodes. */
+const OUTPUT_LAG = 1e9;
 /** Newton iterations of one time step. */
 const STEP_ITERATIONS = 30;
 /** A step that took no more than this is followed by a longer one. */
@@ -16,10 +18,11 @@ const EASY_ITERATIONS = 8;
 
 export function settleTimed(prepared: Prepared, effort: Effort): boolean {
   const { x, size } = prepared;
-  const shunt: Shunt = { conductance: FIRST_CONDUCTANCE, anchor: x.slice(0, size) };
+  const shunt: Shunt = { conductance: FIRST_CONDUCTANCE, anchor: x.slice(0, size), lag: 0 };
   const { run } = effort;
   while (!isSpent(effort)) {
     run.shunt = shunt;
+    shunt.lag = shunt.conductance * OUTPUT_LAG;
     const before = run.iterations;
     if (converges(prepared, effort, STEP_ITERATIONS)) {
       if (shunt.conductance <= LAST_CONDUCTANCE) {

@@ -8,7 +8,7 @@ import { Phase } from '../elements/law.ts';
 import { converges, finishes, isSpent, type Effort } from './effort.ts';
 import { assembleMatrix, assembleResidual, loadElements } from './evaluate.ts';
 import { addShunt, type Shunt } from './newton.ts';
-import type { Prepared } from './prepared.ts';
+import { UnknownKind, type Prepared } from './prepared.ts';
 
 /** g(λ) = SCALE·(e^{RATE·(1 − λ)} − 1), S: 72 S at the start. */
 const SCALE = 1e-12;
@@ -32,13 +32,13 @@ export function settleTraced(prepared: Prepared, effort: Effort): boolean {
 }
 
 function trace(prepared: Prepared, effort: Effort): boolean {
-  const { x, size, work, system, rowKinds } = prepared;
+  const { x, size, work, system, kinds } = prepared;
   const { run } = effort;
-  const shunt: Shunt = { conductance: conductanceAt(0), anchor: new Float64Array(size) };
+  const shunt: Shunt = { conductance: conductanceAt(0), anchor: new Float64Array(size), lag: 0 };
   // An anchor off every symmetry, inside the rails.
   const { low, high } = prepared.hull;
   for (let k = 0; k < size; k++)
-    if (codeAt(rowKinds, k) === 0)
+    if (codeAt(kinds, k) !== UnknownKind.branch)
       shunt.anchor[k] = low + (high - low) * (0.3 + 0.4 * ((k * 0.6180339887498949) % 1));
   x.set(shunt.anchor);
   work.gainScale = 0;
@@ -82,7 +82,8 @@ function trace(prepared: Prepared, effort: Effort): boolean {
     work.gainScale = lambda;
     const slope = conductanceSlope(lambda);
     for (let k = 0; k < size; k++)
-      if (isFree(prepared, k)) byLambda[k] = at(byLambda, k) - slope * (at(x, k) - at(shunt.anchor, k));
+      if (codeAt(kinds, k) >= UnknownKind.bound)
+        byLambda[k] = at(byLambda, k) - slope * (at(x, k) - at(shunt.anchor, k));
     prepared.residual.set(here);
     for (let k = 0; k < size; k++) byLambda[k] = at(byLambda, k) / LAMBDA_VOLTS;
   };
@@ -99,7 +100,8 @@ function trace(prepared: Prepared, effort: Effort): boolean {
     const sign = system.determinantSign();
     orientation ||= sign;
     let length = 1;
-    for (let k = 0; k < size; k++) if (codeAt(rowKinds, k) === 0) length += at(byLambda, k) ** 2;
+    for (let k = 0; k < size; k++)
+      if (codeAt(kinds, k) !== UnknownKind.branch) length += at(byLambda, k) ** 2;
     tangentLambda = (sign * orientation) / Math.sqrt(length);
     for (let k = 0; k < size; k++) tangent[k] = tangentLambda * at(byLambda, k);
     held.set(x);
@@ -141,7 +143,7 @@ function trace(prepared: Prepared, effort: Effort): boolean {
         let along = 0;
         let across = tangentLambda;
         for (let k = 0; k < size; k++) {
-          if (codeAt(rowKinds, k) === 1) continue;
+          if (codeAt(kinds, k) === UnknownKind.branch) continue;
           along += at(tangent, k) * at(correction, k);
           across += at(tangent, k) * at(byLambda, k);
         }
@@ -151,7 +153,7 @@ function trace(prepared: Prepared, effort: Effort): boolean {
       for (let k = 0; k < size; k++) {
         const move = at(correction, k) + change * at(byLambda, k);
         x[k] = at(x, k) + move;
-        if (codeAt(rowKinds, k) === 0) largest = Math.max(largest, Math.abs(move));
+        if (codeAt(kinds, k) !== UnknownKind.branch) largest = Math.max(largest, Math.abs(move));
       }
       lambda += change / LAMBDA_VOLTS;
       if (!(largest < 1e3)) return false;
@@ -160,7 +162,3 @@ function trace(prepared: Prepared, effort: Effort): boolean {
     return false;
   }
 }
-
-const isFree = ({ rowKinds, hull }: Prepared, unknown: number): boolean =>
-  codeAt(rowKinds, unknown) === 0 &&
-  (unknown + 1 >= hull.pinned.length || codeAt(hull.pinned, unknown + 1) === 0);

@@ -15,16 +15,13 @@ export interface Hull {
   readonly pinned: Uint8Array;
 }
 
-export function findHull(circuit: Circuit, nodeCount: number): Hull {
-  const hull: Hull = {
-    low: 0,
-    high: 0,
-    bound: new Uint8Array(nodeCount).fill(1),
-    pinned: new Uint8Array(nodeCount),
-  };
-  updateHull(circuit, hull);
-  return hull;
-}
+/** A hull still to be worked out. */
+export const emptyHull = (nodeCount: number): Hull => ({
+  low: 0,
+  high: 0,
+  bound: new Uint8Array(nodeCount).fill(1),
+  pinned: new Uint8Array(nodeCount),
+});
 
 interface Edge {
   readonly a: number;

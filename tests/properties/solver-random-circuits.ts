@@ -109,12 +109,22 @@ function draw(random: () => number, { law, mosfets = 12, mixed = false }: Random
       );
     for (let k = 1; k <= whole(0, 2); k++)
       elements.push(currentSource(`I${k}`, [any(), free()], { current: spread(1e-7, 1e-2) }));
-    if (chance(0.5))
-      elements.push(
-        chance(0.5)
-          ? amplifier('U1', [free(), any(), free()], { gain: spread(1e2, 1e6) })
-          : amplifier('U1', [free(), any(), free(), 1, 0], { gain: spread(1e2, 1e6) }),
-      );
+    if (chance(0.5)) {
+      const gain = spread(1e2, 1e6);
+      if (chance(0.5)) elements.push(amplifier('U1', [free(), any(), free(), 1, 0], { gain }));
+      else {
+        // Nothing holds an ideal output but its own feedback: inverting input and output are the amplifier's own.
+        nodes.push('summing', 'output');
+        const summing = nodes.length - 2;
+        const output = nodes.length - 1;
+        elements.push(
+          amplifier('U1', [any(), summing, output], { gain }),
+          resistor('RF', [output, summing], { resistance: spread(1e3, 1e6) }),
+          resistor('RI', [summing, whole(0, nodes.length - 3)], { resistance: spread(1e3, 1e6) }),
+          resistor('RL', [output, whole(0, nodes.length - 3)], { resistance: spread(1e3, 1e6) }),
+        );
+      }
+    }
   }
   return { nodes, elements };
 }
