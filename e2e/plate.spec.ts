@@ -2,7 +2,7 @@ import { AxeBuilder } from '@axe-core/playwright';
 import { expect, test } from './page.ts';
 
 test('the page opens on the first example with its readings', async ({ page }) => {
-  await expect(page.getByRole('heading', { level: 1 })).toHaveText('Echo preamplifier');
+  await expect(page.getByRole('heading', { level: 1 })).toHaveText('Echo preamplifier, gauge 14');
   await expect(page.getByTestId('plate').locator('svg')).toBeVisible();
   await expect(page.getByTestId('plate')).toContainText('saturation');
   await expect(page.getByText(/settled in \d+ steps?/)).toBeVisible();

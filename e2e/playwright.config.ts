@@ -10,6 +10,9 @@ export default defineConfig({
   fullyParallel: true,
   forbidOnly: true,
   workers: 2,
+  // Answers are tested, not speed: a machine busy with other work must not fail a test.
+  timeout: 120_000,
+  expect: { timeout: 30_000 },
   outputDir: '../test-results',
   use: {
     baseURL: process.env.RESTPOINT_PAGE ?? '',

@@ -8,6 +8,9 @@ import { routeStage } from '../stage/routing/routeWires.ts';
 import type { StageDocument } from '../stage/schema/stage.ts';
 import { useTheme } from './theme.ts';
 
+/** Enlargement where the sheet has the room; past it a small stage looks coarse. */
+const largest = 1.4;
+
 interface PlateProps {
   readonly stage: StageDocument;
   readonly state: string;
@@ -25,7 +28,7 @@ export function Plate({ stage, state, readings }: PlateProps): ReactElement {
     () => drawStage(placed.document, readings, { density: 'all', routes: placed.routes, state }),
     [placed, readings, state],
   );
-  const picture = toSvg(drawing, themes[theme], { title: `${stage.title}, ${state}` });
+  const picture = toSvg(drawing, themes[theme], { title: `${stage.title}, ${state}`, scale: largest });
   // The text is our own writer's, which escapes whatever a file says.
   return <div className="plate" data-testid="plate" dangerouslySetInnerHTML={{ __html: picture }} />;
 }

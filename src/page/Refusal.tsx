@@ -13,7 +13,9 @@ export function Refusal({ title, faults, list }: RefusalProps): ReactElement {
   return (
     <>
       <Head title={title} />
-      <div className="ledger">{list}</div>
+      <aside className="ledger" aria-label="ledger">
+        {list}
+      </aside>
       <main className="sheet" id="sheet">
         <section className="refusal">
           <h2>This file was not opened.</h2>

@@ -36,12 +36,12 @@ export function StageView({ stage, list }: StageViewProps): ReactElement {
           {stepsOf(readings)}
         </p>
       </Head>
-      <div className="ledger">
+      <aside className="ledger" aria-label="ledger">
         {list}
         {readings.settled && <Transistors state={readings} />}
-        <Notices title="snags" notices={readings.snags} />
-        <Notices title="cautions" notices={readings.cautions} />
-      </div>
+        <Notices kind="snag" notices={readings.snags} />
+        <Notices kind="caution" notices={readings.cautions} />
+      </aside>
       <main className="sheet" id="sheet" tabIndex={0} aria-label="sheet">
         <Plate stage={stage} state={state} readings={readings} />
         {readings.settled && <ReadingsTable title={`${stage.title}, ${state}`} state={readings} />}

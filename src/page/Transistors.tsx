@@ -20,6 +20,7 @@ function Region({ reading }: { readonly reading: TransistorReading }): ReactElem
       <Badge sign={{ ...sign, family: reading.kind, verdict }} />
       <p className="region">
         {badgeWords(sign)}
+        <br />
         <span className="figure">{figureText(current, 'A')}</span>
       </p>
     </>

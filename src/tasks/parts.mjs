@@ -41,7 +41,13 @@ export const parts = [
   ...ownParts.map((folder) => vitest(folder, [`--exclude=tests/!(${folder})/**`])),
   {
     name: 'e2e',
-    command: () => [installed('playwright'), 'test', '--config', 'e2e/playwright.config.ts'],
+    command: () => [
+      installed('playwright'),
+      'test',
+      '--config',
+      'e2e/playwright.config.ts',
+      '--reporter=list,json',
+    ],
     count: fromPlaywright,
     needsBrowser: true,
   },
