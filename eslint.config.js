@@ -37,13 +37,19 @@ const zones = Object.entries(mayImport).flatMap(([folder, allowed]) => {
 });
 
 export default defineConfig(
-  { ignores: ['dist/**', 'node_modules/**', 'test-results/**', 'playwright-report/**'] },
+  { ignores: ['dist/**', '.cache/**', 'node_modules/**', 'test-results/**', 'playwright-report/**'] },
   js.configs.recommended,
-  { files: ['**/*.{ts,tsx}'], extends: [tseslint.configs.strictTypeChecked, tseslint.configs.stylisticTypeChecked] },
+  {
+    files: ['**/*.{ts,tsx}'],
+    extends: [tseslint.configs.strictTypeChecked, tseslint.configs.stylisticTypeChecked],
+  },
   {
     languageOptions: {
       globals: { ...globals.browser, ...globals.node },
-      parserOptions: { projectService: { allowDefaultProject: ['*.js'] }, tsconfigRootDir: import.meta.dirname },
+      parserOptions: {
+        projectService: { allowDefaultProject: ['*.js'] },
+        tsconfigRootDir: import.meta.dirname,
+      },
     },
     plugins: { 'import-x': importX },
     settings: {
@@ -57,7 +63,10 @@ export default defineConfig(
   {
     files: ['**/*.{ts,tsx}'],
     rules: {
-      '@typescript-eslint/restrict-template-expressions': ['error', { allowNumber: true, allowBoolean: true }],
+      '@typescript-eslint/restrict-template-expressions': [
+        'error',
+        { allowNumber: true, allowBoolean: true },
+      ],
       '@typescript-eslint/no-confusing-void-expression': ['error', { ignoreArrowShorthand: true }],
       '@typescript-eslint/consistent-type-imports': 'error',
     },
@@ -67,7 +76,11 @@ export default defineConfig(
     files: ['solver/matrix/**', 'solver/elements/**'],
     rules: { '@typescript-eslint/no-non-null-assertion': 'off' },
   },
-  { files: ['src/**/*.tsx'], plugins: { 'react-hooks': reactHooks }, rules: reactHooks.configs.recommended.rules },
+  {
+    files: ['src/**/*.tsx'],
+    plugins: { 'react-hooks': reactHooks },
+    rules: reactHooks.configs.recommended.rules,
+  },
   {
     // Konva's own Stage is imported as KonvaStage, in sheet/ alone.
     files: ['**/*.{ts,tsx}'],
