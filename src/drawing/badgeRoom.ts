@@ -1,18 +1,20 @@
 /**
- * The block of a badge: the frame, the word and the current beside or under it. Places for it round a transistor or
- * a diode, best first.
+ * The block of a badge: the frame, with the word and the current beside, under or over it. Places for it round a
+ * transistor or a diode.
  */
 import type { Box } from '../../symbols/art.ts';
 import { badgeClearance } from './badge/badge.ts';
 import { badgeSize } from './badge/curves.ts';
 import { boxAt, grown, union, type Point } from './boxes.ts';
-import { blockBox, type TextBlock, type TextLine } from './lettering/textBlock.ts';
 import { facingOf } from './lettering/facing.ts';
+import { blockBox, type TextBlock, type TextLine } from './lettering/textBlock.ts';
 import type { ScenePart } from './scene.ts';
 
 export interface BadgePlace {
   readonly corner: Point;
   readonly words: TextBlock;
+  /** Less is better. */
+  readonly cost: number;
 }
 
 /** From the frame to the word. */
@@ -23,60 +25,66 @@ const { width, height } = badgeSize;
 /** Boxes a placed badge takes: the frame with what a missed duty draws round it, and the words. */
 export const badgeBoxes = ({ corner: [x, y], words }: BadgePlace): readonly Box[] => [
   grown(boxAt(x, y, width, height), badgeClearance - 2),
-  blockBox(words),
+  grown(blockBox(words), 2.5),
 ];
 
 export const badgeBlock = (place: BadgePlace): Box => union(badgeBoxes(place)) ?? boxAt(0, 0, 0, 0);
 
-type Side = 'right' | 'left' | 'under' | 'over';
+type Words = 'right' | 'left' | 'under';
 
-const block = (corner: Point, lines: readonly TextLine[], words: Side): BadgePlace => {
+const block = (corner: Point, lines: readonly TextLine[], side: Words, cost: number): BadgePlace => {
   const [x, y] = corner;
-  const half = ((lines.length - 1) * 16) / 2 + 6;
-  const at: Point =
-    words === 'right'
-      ? [x + width + besideFrame, y + height / 2]
-      : words === 'left'
-        ? [x - besideFrame, y + height / 2]
-        : words === 'under'
-          ? [x, y + height + 9 + half]
-          : [x, y - 9 - half];
-  return { corner, words: { lines, at, align: words === 'left' ? 'right' : 'left', size: 13 } };
+  const size = 13;
+  switch (side) {
+    case 'right':
+      return {
+        corner,
+        cost,
+        words: { lines, at: [x + width + besideFrame, y + height / 2], align: 'left', size },
+      };
+    case 'left':
+      return { corner, cost, words: { lines, at: [x - besideFrame, y + height / 2], align: 'right', size } };
+    case 'under':
+      // A stack takes more height but is no wider than its words.
+      return {
+        corner,
+        cost: cost + 6,
+        words: { lines, at: [x, y + height + 15 + ((lines.length - 1) * 16) / 2], align: 'left', size },
+      };
+  }
 };
 
-/** Places round a part, in order of liking. */
+/** Shifts along the side of the part, with what each costs. */
+const along = [0, 6, -6, 12, -12, 18, -18, 24, -24, 30, -30, 36, -36, 42, -42];
+/** Steps away from the part. */
+const away = [0, 6, 12, 24, 36, 48, 72, 96, 120];
+
 export const badgePlaces = (part: ScenePart, lines: readonly TextLine[]): readonly BadgePlace[] => {
   const { body, origin } = part;
   const facing = facingOf(part);
-  const right = body.right + fromBody;
-  const left = body.left - fromBody - width;
-  const level = origin[1] - 16;
-  const steps = [0, 6, -6, 12, -12, 18, -18, 24, -24, 36, -36, 48, -48];
-  const at = (x: number, words: Side, rows: readonly number[] = steps) =>
-    rows.map((step) => block([x, level + step], lines, words));
-  const onRight = [...at(right, 'right'), ...at(right, 'under'), ...at(right, 'over')];
-  const onLeft = [...at(left, 'left'), ...at(left, 'under'), ...at(left, 'over')];
-  const farther = [12, 24, 36, 48, 72, 96].flatMap((way) => [
-    ...at(right + way, 'right'),
-    ...at(left - way, 'left'),
-    ...at(right + way, 'under'),
-    ...at(left - way, 'under'),
-  ]);
-  const columns = [0, 12, -12, 24, -24, 36, -36, 48, -48, 60, -60, 84, -84, 108, -108];
-  const overAndUnder = [20, 32, 44, 62, 80].flatMap((way) =>
-    columns.flatMap((step) => [
-      block([origin[0] - width / 2 + step, body.top - way - height], lines, 'right'),
-      block([origin[0] - width / 2 + step, body.bottom + way], lines, 'right'),
-    ]),
+  const liked = facing.form === 'transistor' ? facing.away : facing.form === 'lying' ? 'up' : 'right';
+  // A diode's name is at its side; a transistor's is over the badge.
+  const level = origin[1] - (facing.form === 'transistor' ? 16 : 20);
+  const places = away.flatMap((way) =>
+    along.flatMap((shift): BadgePlace[] => {
+      const cost = way * 0.35 + Math.abs(shift) * 0.3;
+      const beside = (side: 'right' | 'left'): readonly BadgePlace[] => {
+        const dislike = side === liked ? 0 : liked === 'up' || liked === 'down' ? 9 : 12;
+        const x = side === 'right' ? body.right + fromBody + way : body.left - fromBody - width - way;
+        return [
+          block([x, level + shift], lines, side, cost + dislike),
+          block([x, level + shift], lines, 'under', cost + dislike),
+        ];
+      };
+      const level2 = (side: 'up' | 'down'): readonly BadgePlace[] => {
+        const dislike = side === liked ? 0 : liked === 'up' || liked === 'down' ? 3 : 16;
+        const y = side === 'up' ? body.top - 20 - way - height : body.bottom + 20 + way;
+        return [-60, -30, 0].map((column) =>
+          block([origin[0] + column + shift, y], lines, 'right', cost + dislike + (column === -30 ? 0 : 1)),
+        );
+      };
+      return [...beside('right'), ...beside('left'), ...level2('up'), ...level2('down')];
+    }),
   );
-  const away = facing.form === 'transistor' ? facing.away : facing.form === 'lying' ? 'up' : 'right';
-  switch (away) {
-    case 'right':
-      return [...onRight, ...onLeft, ...farther, ...overAndUnder];
-    case 'left':
-      return [...onLeft, ...onRight, ...farther, ...overAndUnder];
-    case 'up':
-    case 'down':
-      return [...overAndUnder, ...onRight, ...onLeft, ...farther];
-  }
+  return places.sort((a, b) => a.cost - b.cost);
 };

@@ -9,7 +9,7 @@ import type { TextPrimitive } from './primitives.ts';
 export const fontFamily = 'Source Sans 3';
 
 /** For the pens: the family, and what may stand in where it is missing. */
-export const fontStack = `'${fontFamily}', 'Segoe UI', 'Helvetica Neue', Arial, sans-serif`;
+export const fontStack = `'${fontFamily}', sans-serif`;
 
 type Weight = 400 | 600;
 

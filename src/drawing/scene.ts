@@ -56,7 +56,12 @@ export interface Scene {
 /** Lines of wires in grid units, both ends included, as the router gives them. */
 export type Routes = ReadonlyMap<string, readonly Point[]>;
 
-export const sceneOf = (document: DrawnStage, routes: Routes): Scene => {
+/** As much of the stage document as is drawn. */
+export interface DrawableStage extends DrawnStage {
+  readonly parts: Readonly<Record<string, DrawnPart & { readonly label?: string | undefined }>>;
+}
+
+export const sceneOf = (document: DrawableStage, routes: Routes): Scene => {
   const wired = wiredPins(document);
   const parts = Object.entries(document.parts).flatMap(([id, part]) => {
     const standingOne = scenePart(document, id, part, wired.get(id) ?? new Set());
@@ -85,9 +90,9 @@ export const sceneOf = (document: DrawnStage, routes: Routes): Scene => {
 const toPixels = ([x, y]: Point): Point => [x * unit, y * unit];
 
 const scenePart = (
-  document: DrawnStage,
+  document: DrawableStage,
   id: string,
-  part: DrawnPart,
+  part: DrawableStage['parts'][string],
   wired: ReadonlySet<string>,
 ): ScenePart | undefined => {
   const kind = kindNamed(part.kind);
@@ -96,11 +101,16 @@ const scenePart = (
   const device = part.device === undefined ? undefined : document.devices[part.device];
   const context: PartContext = {
     name: part.name ?? id,
+    ...(part.label === undefined ? {} : { label: part.label }),
     values: part.values ?? {},
     ...(device === undefined ? {} : { device }),
     wired,
   };
-  const lines = kind?.text(context).filter((line) => line !== '') ?? [];
+  // A device's title is long and the same for all its like: the ledger and the plate's table give it.
+  const title = (device as { readonly title?: unknown } | undefined)?.title;
+  const label = part.label ?? part.name;
+  const lines =
+    kind?.text(context).filter((line) => line !== '' && line !== title && line !== part.label) ?? [];
   const stance: Stance = { mirror: part.mirror ?? false, turn: part.turn ?? 0 };
   const joins = kind?.joins ?? 'nothing';
   const art = joins === 'label' ? tagFor(lines[0] ?? part.name ?? '', stance) : stated;
@@ -114,7 +124,7 @@ const scenePart = (
   return {
     id,
     kind: part.kind,
-    label: part.name,
+    label,
     key: part.name ?? id,
     origin,
     stance,

@@ -18,6 +18,8 @@ export interface Seeker<Where extends Place> {
   readonly id: string;
   /** Best first. */
   readonly places: readonly Where[];
+  /** Put here by a person: the only place, and taken whatever stands there. */
+  readonly fixed?: boolean;
 }
 
 /** How many ways of asking others to move are tried for one reading. */
@@ -30,7 +32,6 @@ export const solvePlaces = <Where extends Place>(
   occupancy: Occupancy,
 ): ReadonlyMap<string, Where> => {
   const given = new Map<string, Where>();
-  const owners = new Set(seekers.map(({ id }) => id));
 
   const isFree = ({ boxes, shares }: Where): boolean =>
     boxes.every((box) => occupancy.isFree(box, (owner) => shares.includes(owner)));
@@ -45,7 +46,13 @@ export const solvePlaces = <Where extends Place>(
     return place;
   };
 
-  const open = seekers.map(({ id, places }) => ({ id, places: places.filter(isFree) }));
+  for (const { id, places, fixed } of seekers) {
+    const [place] = places;
+    if (fixed === true && place !== undefined) give(id, place);
+  }
+  const free = seekers.filter(({ fixed }) => fixed !== true);
+  const owners = new Set(free.map(({ id }) => id));
+  const open = free.map(({ id, places }) => ({ id, places: places.filter(isFree) }));
   const placesOf = new Map(open.map(({ id, places }) => [id, places]));
   const inOrder = [...open].sort((a, b) => a.places.length - b.places.length);
 
