@@ -27,13 +27,8 @@ export {
   type LogicOutputOperating,
   type LogicOutputParameters,
 } from './elements/logic-output.ts';
-export {
-  mosfet,
-  type Inversion,
-  type MosfetOperating,
-  type MosfetParameters,
-  type MosfetRegion,
-} from './elements/mosfet.ts';
+export { mosfet, type MosfetParameters } from './elements/mosfet.ts';
+export type { Inversion, MosfetOperating, MosfetRegion } from './elements/mosfet-operating.ts';
 export {
   potentiometer,
   type PotentiometerOperating,
@@ -66,6 +61,7 @@ export type {
   StructureFault,
   Unsettled,
   UnsettledReason,
+  Unset,
 } from './settle/settlement.ts';
 
 // --- Constants that others show or convert with ---

@@ -148,7 +148,7 @@ export const bipolarLaw: ElementLaw<BipolarOperating> = {
     const npn = values[0]! > 0;
     const junction = (end: number) =>
       ({ kind: 'junction', from: npn ? BASE : end, to: npn ? end : BASE }) as const;
-    return [junction(COLLECTOR), junction(EMITTER), { kind: 'passive', from: COLLECTOR, to: EMITTER }];
+    return [junction(COLLECTOR), junction(EMITTER), { kind: 'channel', from: COLLECTOR, to: EMITTER }];
   },
 
   derive(values, { temperature, leak }, derived, at) {

@@ -53,8 +53,10 @@ export const REFERENCE = -1;
 
 /** A way for direct current between two local terminals (internal nodes allowed; `REFERENCE` for node 0). */
 export type Path =
-  /** Resistor or channel. */
+  /** Resistor, closed contact, winding: conducts whatever the voltages are. */
   | { readonly kind: 'passive'; readonly from: number; readonly to: number }
+  /** Channel of a transistor, collector to emitter: passive, but conducts only when it is on. */
+  | { readonly kind: 'channel'; readonly from: number; readonly to: number }
   /** A junction, `from` anode `to` cathode. Passive. */
   | { readonly kind: 'junction'; readonly from: number; readonly to: number }
   /** Voltage source, plus `from`, minus `to`, V; `ideal` where nothing is in series. */

@@ -3,7 +3,7 @@
  * frame brings every device by its polarity and by exchanging drain and source.
  */
 import { REFERENCE_TEMPERATURE, thermalVoltage } from './constants.ts';
-import type { Inversion } from './mosfet.ts';
+import type { Inversion } from './mosfet-operating.ts';
 
 /** Order of a MOSFET's values. */
 export const mosfetParameters = [

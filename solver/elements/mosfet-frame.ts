@@ -26,7 +26,7 @@ import {
   mosfetParameters,
   type Channel,
 } from './mosfet-channel.ts';
-import type { MosfetOperating } from './mosfet.ts';
+import type { MosfetOperating } from './mosfet-operating.ts';
 
 // Local unknowns.
 const DRAIN = 0;
@@ -106,7 +106,7 @@ export function mosfetLaw(channel: Channel, series: boolean): ElementLaw<MosfetO
       const junction = (end: number) =>
         ({ kind: 'junction', from: n ? BODY : end, to: n ? end : BODY }) as const;
       return [
-        { kind: 'passive', from: DRAIN, to: SOURCE },
+        { kind: 'channel', from: channelDrain, to: channelSource },
         junction(DRAIN),
         junction(SOURCE),
         ...(series

@@ -3,11 +3,9 @@ import type { Element } from '../circuit.ts';
 import { DISCRETE_SATURATION_CURRENT, SILICON_BAND_GAP } from './constants.ts';
 import type { ElementLaw } from './law.ts';
 import { mosfetLaw } from './mosfet-frame.ts';
+import type { MosfetOperating } from './mosfet-operating.ts';
 import { smoothChannel } from './mosfet-smooth.ts';
 import { squareChannel } from './mosfet-square.ts';
-
-export type MosfetRegion = 'cutoff' | 'triode' | 'saturation' | 'body-diode';
-export type Inversion = 'weak' | 'moderate' | 'strong';
 
 /** Parameters at 25 °C, as the device is: an enhancement p-channel has a negative threshold. */
 export interface MosfetParameters {
@@ -41,42 +39,6 @@ export interface MosfetParameters {
     /** Ω; 0, with the junction's tangent at 10 mΩ all the same. */
     readonly seriesResistance?: number;
   };
-}
-
-/** Voltages between the pins of those names, true signs. Threshold, overdrive, saturation voltage: roles exchanged where reversed. */
-export interface MosfetOperating {
-  readonly region: MosfetRegion;
-  /** Drain and source have exchanged roles: s·V_DS < 0. */
-  readonly reversed: boolean;
-  /** From the forward inversion coefficient; smooth law only. */
-  readonly inversion?: Inversion;
-  readonly inversionCoefficient?: number;
-  readonly gateToSource: number;
-  readonly drainToSource: number;
-  readonly sourceToBody: number;
-  /** V_T with body effect and temperature, V, signed as the device is. */
-  readonly threshold: number;
-  /** s·(V_GS − V_T), V: positive when the channel is on. */
-  readonly overdrive: number;
-  /** V_DSsat, V, a magnitude, not below 0. */
-  readonly saturationVoltage: number;
-  /** |V_DS| inside the series resistances: what the region is judged by, V. */
-  readonly channelVoltage: number;
-  /** Total, in the device's normal direction (into the drain for n, out of it for p), diode included, A. */
-  readonly drainCurrent: number;
-  /** The channel's share of it, A. */
-  readonly channelCurrent: number;
-  /** The drain–body diode's share of it, A: negative where the diode conducts forward. */
-  readonly diodeCurrent: number;
-  /** Forward current of the drain–body junction and of the source–body junction, A; negative in reverse. */
-  readonly drainJunctionCurrent: number;
-  readonly sourceJunctionCurrent: number;
-  /** g_m, g_mb, g_ds of the channel, S, roles exchanged where reversed. */
-  readonly transconductance: number;
-  readonly bodyTransconductance: number;
-  readonly outputConductance: number;
-  /** Absorbed, W. */
-  readonly power: number;
 }
 
 const laws: Record<

@@ -10,6 +10,8 @@ export interface Effort {
   /** `performance.now()` at which everything must stop. */
   readonly deadline: number;
   readonly signal: AbortSignal | undefined;
+  /** Unknown that a pseudo-transient saw run off without end, or −1. */
+  ranAway: number;
 }
 
 /** True when the method must give up: iterations or time spent, or cancelled. */

@@ -24,6 +24,10 @@ export const HULL_MARGIN = 1e-9;
 
 /** A reading that moves by more than this with the leak at a hundredth is not set by the drawing, V. */
 export const UNSET_MOVE = 1e-3;
+/** A junction or channel of less conductance than this does not set the voltage of a node, S. */
+export const UNSET_CONDUCTANCE = 1e-9;
+/** A junction across voltage sources that carries more than this has nothing that limits it, A. */
+export const STRAIGHT_CURRENT = 2.5;
 
 /** Newton iterations, and time for everything, ms. */
 export const DIRECT_BUDGET = 200;

@@ -98,6 +98,7 @@ export function layOut(circuit: Circuit): Prepared {
   const entryRows: number[] = [];
   const entryColumns: number[] = [];
   const lagging: EntryPlace[] = [];
+  let internalCount = 0;
   let derived = 0;
   let memory = 0;
   let value = 0;
@@ -118,6 +119,7 @@ export function layOut(circuit: Circuit): Prepared {
         entryColumns.push(local[column] ?? -1);
       }
       for (const [row, column] of law.lags ?? []) lagging.push([local[row] ?? -1, local[column] ?? -1]);
+      internalCount += law.internals.length;
       derived += law.derivedSize;
       memory += law.memorySize;
       value += element.values.length;
@@ -173,7 +175,7 @@ export function layOut(circuit: Circuit): Prepared {
     residual: new Float64Array(size + 1),
     magnitude: new Float64Array(size + 1),
     rounding: new Float64Array(size + 1),
-    hull: emptyHull(nodeCount),
+    hull: emptyHull(nodeCount + internalCount),
     seenValues: new Float64Array(value).fill(NaN),
     seenTemperatures: new Float64Array(places.length).fill(NaN),
     seenLeaks: new Float64Array(places.length).fill(NaN),

@@ -1,4 +1,5 @@
 /** Works out anew what depends on values and temperature, where these changed since the last time. */
+import type { Element } from '../circuit.ts';
 import { at, codeAt, indexAt } from '../elements/at.ts';
 import { DECLARED_LEAK } from '../elements/constants.ts';
 import { updateHull } from '../structure/hull.ts';
@@ -16,8 +17,8 @@ export const wholeLeak: LeakScale = () => 1;
  */
 export const hundredthLeak: LeakScale = (element) => 0.01 * (0.5 + ((element * 0.6180339887498949) % 1));
 
-/** Brings `derived` up to date. Returns the element with a value that is no finite number, if any. */
-export function refresh(prepared: Prepared, options: SettleOptions, leakScale: LeakScale): number | null {
+/** Brings `derived` up to date. Returns an element whose values give no number, if there is one. */
+export function refresh(prepared: Prepared, options: SettleOptions, leakScale: LeakScale): Element | null {
   const { places, work, seenValues, seenTemperatures, seenLeaks } = prepared;
   let changed = false;
   for (let e = 0; e < places.length; e++) {
@@ -42,7 +43,7 @@ export function refresh(prepared: Prepared, options: SettleOptions, leakScale: L
     for (let k = 0; k < law.derivedSize; k++)
       if (Number.isNaN(at(work.derived, place.derived + k))) {
         seenTemperatures[e] = NaN;
-        return e;
+        return element;
       }
   }
   if (changed) updateKinds(prepared);
@@ -52,18 +53,15 @@ export function refresh(prepared: Prepared, options: SettleOptions, leakScale: L
 /** Works out the hull and from it the kind of every node. */
 function updateKinds({ circuit, hull, kinds, places, gather }: Prepared): void {
   updateHull(circuit, hull);
-  for (let node = 1; node < hull.bound.length; node++)
-    kinds[node - 1] =
-      codeAt(hull.pinned, node) === 1
-        ? UnknownKind.pinned
-        : codeAt(hull.bound, node) === 1
-          ? UnknownKind.bound
-          : UnknownKind.loose;
-  // An internal node is as free as the freest of the element's terminals.
+  const kindOf = (node: number): number => {
+    if (codeAt(hull.pinned, node) === 1) return UnknownKind.pinned;
+    return codeAt(hull.bound, node) === 1 ? UnknownKind.bound : UnknownKind.loose;
+  };
+  for (let node = 1; node < circuit.nodes.length; node++) kinds[node - 1] = kindOf(node);
+  let internal = circuit.nodes.length;
   for (const { element, unknown } of places) {
     const { terminals, internals } = element.law;
-    const loose = element.nodes.some((node) => node > 0 && kinds[node - 1] === UnknownKind.loose);
     for (let k = 0; k < internals.length; k++)
-      kinds[indexAt(gather, unknown + terminals.length + k)] = loose ? UnknownKind.loose : UnknownKind.bound;
+      kinds[indexAt(gather, unknown + terminals.length + k)] = kindOf(internal++);
   }
 }

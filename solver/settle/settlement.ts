@@ -7,6 +7,14 @@ import type { Element } from '../circuit.ts';
  */
 export type Method = 'direct' | 'timed' | 'ramped' | 'traced';
 
+/** What the drawing does not set. */
+export interface Unset {
+  /** Nodes whose voltage against the reference is not set. */
+  readonly nodes: readonly number[];
+  /** Elements with a voltage between two terminals that is not set. */
+  readonly elements: readonly Element[];
+}
+
 export interface Settlement {
   readonly settled: true;
   readonly method: Method;
@@ -21,12 +29,9 @@ export interface Settlement {
   /** The element's operating point, as its law states it. */
   operating<Operating>(element: Element<Operating>): Operating;
   /** What only the declared leak decides; empty where that was not asked for. */
-  readonly unset: {
-    /** Nodes whose voltage moves by more than 1 mV with the leak at a hundredth. */
-    readonly nodes: readonly number[];
-    /** Elements with a voltage between two terminals that does. */
-    readonly elements: readonly Element[];
-  };
+  readonly unset: Unset;
+  /** Elements with a junction that lies straight across voltage sources: only its guard resistance limits it. */
+  readonly straightAcross: readonly Element[];
   /** All unknowns: a start for settling again. */
   readonly state: Float64Array;
 }
@@ -39,6 +44,8 @@ export type UnsettledReason =
   | 'parameter'
   /** The equations have no single answer at these values. */
   | 'singular'
+  /** An output that nothing limits drives itself off without end. */
+  | 'runaway'
   /** The point found lies outside the rails, or carries more than 1 MA: no reading. */
   | 'beyond-rails'
   | 'over-current';

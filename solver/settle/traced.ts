@@ -51,7 +51,6 @@ function trace(prepared: Prepared, effort: Effort): boolean {
   const byLambda = new Float64Array(size + 1);
   const correction = new Float64Array(size + 1);
   const held = x.slice();
-  let heldLambda = 0;
   let orientation = 0;
   let step = FIRST_STEP;
 
@@ -105,7 +104,7 @@ function trace(prepared: Prepared, effort: Effort): boolean {
     tangentLambda = (sign * orientation) / Math.sqrt(length);
     for (let k = 0; k < size; k++) tangent[k] = tangentLambda * at(byLambda, k);
     held.set(x);
-    heldLambda = lambda;
+    const heldLambda = lambda;
 
     // --- A step along it, and back to the path at right angles to it ---
     let corrected = false;

@@ -3,24 +3,24 @@
  * transistors drive (the no-gain property: Willson 1975). It follows from the sources alone.
  */
 import type { Circuit } from '../circuit.ts';
-import type { Path } from '../elements/law.ts';
+import { graphOf } from './graph.ts';
 
 export interface Hull {
   /** V, of all rails, the reference included, at the values last looked at. */
   low: number;
   high: number;
-  /** By node: 1 where the node must stay inside; 0 where a forced or driven current reaches it. */
+  /** By node, then by internal node as in the graph: 1 where the node must stay inside; 0 where a forced or driven current reaches it. */
   readonly bound: Uint8Array;
-  /** By node: 1 where voltage sources alone hold the node against the reference. */
+  /** Likewise: 1 where voltage sources alone hold the node against the reference. */
   readonly pinned: Uint8Array;
 }
 
 /** A hull still to be worked out. */
-export const emptyHull = (nodeCount: number): Hull => ({
+export const emptyHull = (size: number): Hull => ({
   low: 0,
   high: 0,
-  bound: new Uint8Array(nodeCount).fill(1),
-  pinned: new Uint8Array(nodeCount),
+  bound: new Uint8Array(size).fill(1),
+  pinned: new Uint8Array(size),
 });
 
 interface Edge {
@@ -33,27 +33,17 @@ interface Edge {
 
 /** Works the hull out anew from the present values. Not in the inner loop. */
 export function updateHull(circuit: Circuit, hull: Hull): void {
-  const nodeCount = hull.bound.length;
   const sources: Edge[] = [];
   const conducts: [number, number][] = [];
   const driven: number[] = [];
   const drivenIdeal: [number, number][] = [];
-  for (const element of circuit.elements) {
-    const node = (local: number): number => (local < 0 ? 0 : (element.nodes[local] ?? -1));
-    for (const path of element.law.paths(element.values)) collect(path, node);
-  }
-
-  function collect(path: Path, node: (local: number) => number): void {
-    const a = node(path.from);
-    const b = node(path.to);
+  const graph = graphOf(circuit);
+  for (const { path, from: a, to: b } of graph.edges) {
     if (path.kind === 'source') sources.push({ a, b, voltage: path.voltage, ideal: path.ideal });
-    // An internal node's neighbours are the element's own terminals, which its other paths join.
-    else if (path.kind === 'passive' || path.kind === 'junction') {
-      if (a >= 0 && b >= 0) conducts.push([a, b]);
-    } else {
+    else if (path.kind === 'current' || path.kind === 'driven') {
       driven.push(a, b);
       if (path.kind === 'driven' && path.ideal) drivenIdeal.push([a, b]);
-    }
+    } else conducts.push([a, b]);
   }
 
   // --- Potentials that sources fix, each as an interval: sources with resistance, or in a loop, widen it ---
@@ -92,7 +82,7 @@ export function updateHull(circuit: Circuit, hull: Hull): void {
   // --- Where a forced or driven current reaches ---
   hull.bound.fill(1);
   const loose: number[] = driven.filter((node) => node > 0 && hull.pinned[node] === 0);
-  const neighbours = Array.from({ length: nodeCount }, (): number[] => []);
+  const neighbours = Array.from({ length: graph.size }, (): number[] => []);
   for (const [a, b] of [...conducts, ...sources.map(({ a, b }): [number, number] => [a, b])]) {
     neighbours[a]?.push(b);
     neighbours[b]?.push(a);

@@ -2,6 +2,7 @@
 import type { Circuit, Element } from '../circuit.ts';
 import type { StructureFault } from '../settle/settlement.ts';
 import { DisjointSets, type Graph } from './graph.ts';
+import { list } from './list.ts';
 
 /** One fault for each island, named by what leaves it hanging. */
 export function findIslands(circuit: Circuit, graph: Graph): StructureFault[] {
@@ -67,7 +68,3 @@ function faultOf(circuit: Circuit, graph: Graph, members: readonly number[]): St
 }
 
 const names = (elements: readonly Element[]): string[] => [...new Set(elements.map(({ name }) => name))];
-
-/** "a", "a and b", "a, b and c". */
-export const list = (words: readonly string[]): string =>
-  words.length < 2 ? words.join('') : `${words.slice(0, -1).join(', ')} and ${words.at(-1) ?? ''}`;

@@ -2,7 +2,7 @@
 import type { Circuit } from '../circuit.ts';
 import type { StructureFault } from '../settle/settlement.ts';
 import { DisjointSets, type Edge, type Graph } from './graph.ts';
-import { list } from './islands.ts';
+import { list } from './list.ts';
 
 /** One fault for each source that closes a loop. */
 export function findLoops(circuit: Circuit, graph: Graph): StructureFault[] {
