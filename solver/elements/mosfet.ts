@@ -7,6 +7,8 @@ import type { MosfetOperating } from './mosfet-operating.ts';
 import { smoothChannel } from './mosfet-smooth.ts';
 import { squareChannel } from './mosfet-square.ts';
 
+export type { Inversion, MosfetOperating, MosfetRegion } from './mosfet-operating.ts';
+
 /** Parameters at 25 °C, as the device is: an enhancement p-channel has a negative threshold. */
 export interface MosfetParameters {
   /** +1 n-channel, −1 p-channel. */
