@@ -35,8 +35,8 @@ const set = (name: (typeof mosfetParameters)[number], value: number) => {
 
 /** A device at a temperature, ready to be measured. Only the one prepared last may be measured. */
 interface Prepared {
-  /** Channel current at voltages inside the series resistances, A. */
-  readonly current: (gateToSource: number, drainToSource: number) => number;
+  /** Channel current at voltages inside the series resistances, A. The body is at the source pin. */
+  readonly current: (gateToSource: number, drainToSource: number, sourceToBody: number) => number;
   readonly drain: number;
   readonly source: number;
 }
@@ -55,9 +55,8 @@ function prepare(law: MosfetLaw, channel: ChannelParameters, temperature: number
   const rise = (temperature / REFERENCE_TEMPERATURE) ** 2.3;
   const source = channel.sourceResistance * rise;
   return {
-    // The drop at the source is counted into the gate voltage; on the body, at the source pin, it is too small to count.
-    current: (gateToSource, drainToSource) => {
-      channelLaw.evaluate(derived, 0, gateToSource, Math.max(drainToSource, 0), 0);
+    current: (gateToSource, drainToSource, sourceToBody) => {
+      channelLaw.evaluate(derived, 0, gateToSource, Math.max(drainToSource, 0), sourceToBody);
       return channelResult[0] ?? 0;
     },
     drain: channel.drainResistance * rise,
@@ -80,10 +79,11 @@ export function onResistance(
   temperature: number,
 ): number {
   const { current, drain, source } = prepare(law, channel, temperature);
-  const gate = gateToSource - drainCurrent * source;
-  const most = current(gate, HIGHEST);
+  const atSource = drainCurrent * source;
+  const gate = gateToSource - atSource;
+  const most = current(gate, HIGHEST, atSource);
   if (!(most > drainCurrent)) return HIGHEST / Math.max(most, 1e-300);
-  const across = findRoot((v) => current(gate, v) - drainCurrent, 0, HIGHEST) ?? HIGHEST;
+  const across = findRoot((v) => current(gate, v, atSource) - drainCurrent, 0, HIGHEST) ?? HIGHEST;
   return across / drainCurrent + drain + source;
 }
 
@@ -100,8 +100,9 @@ export function thresholdFor(
 ): number | undefined {
   const excess = (threshold: number) => {
     const { current, drain, source } = prepare(law, { ...channel, threshold }, temperature);
-    const gate = gateToSource - drainCurrent * source;
-    return current(gate, drainToSource - drainCurrent * (drain + source)) - drainCurrent;
+    const atSource = drainCurrent * source;
+    const inside = drainToSource - atSource - drainCurrent * drain;
+    return current(gateToSource - atSource, inside, atSource) - drainCurrent;
   };
   return findRoot(excess, gateToSource - 200, gateToSource + 20);
 }
@@ -114,8 +115,12 @@ export function diodeConnectedVoltage(
   temperature: number,
 ): number | undefined {
   const { current, drain, source } = prepare(law, channel, temperature);
-  const atGate = drainCurrent * source;
-  return findRoot((v) => current(v - atGate, v - atGate - drainCurrent * drain) - drainCurrent, 0, HIGHEST);
+  const atSource = drainCurrent * source;
+  return findRoot(
+    (v) => current(v - atSource, v - atSource - drainCurrent * drain, atSource) - drainCurrent,
+    0,
+    HIGHEST,
+  );
 }
 
 /** V_GS at which the device carries `drainCurrent` at `drainToSource`, V. */
@@ -127,10 +132,11 @@ export function gateVoltageFor(
   temperature: number,
 ): number | undefined {
   const { current, drain, source } = prepare(law, channel, temperature);
-  const inside = drainToSource - drainCurrent * (drain + source);
+  const atSource = drainCurrent * source;
+  const inside = drainToSource - atSource - drainCurrent * drain;
   if (!(inside > 0)) return undefined;
-  const gate = findRoot((v) => current(v, inside) - drainCurrent, -HIGHEST, HIGHEST);
-  return gate === undefined ? undefined : gate + drainCurrent * source;
+  const gate = findRoot((v) => current(v, inside, atSource) - drainCurrent, -HIGHEST, HIGHEST);
+  return gate === undefined ? undefined : gate + atSource;
 }
 
 /** g_fs = ∂I_D/∂V_GS at a drain voltage and current, S. */
@@ -144,10 +150,11 @@ export function forwardTransconductance(
   const gate = gateVoltageFor(law, channel, drainToSource, drainCurrent, temperature);
   if (gate === undefined) return undefined;
   const { current, drain, source } = prepare(law, channel, temperature);
-  current(gate - drainCurrent * source, drainToSource - drainCurrent * (drain + source));
-  const [, toGate = 0, toDrain = 0] = channelResult;
-  // As the current rises, the source takes of the gate voltage and both resistances of the drain voltage.
-  return toGate / (1 + toGate * source + toDrain * (drain + source));
+  const atSource = drainCurrent * source;
+  current(gate - atSource, drainToSource - atSource - drainCurrent * drain, atSource);
+  const [, toGate = 0, toDrain = 0, toBody = 0] = channelResult;
+  // As the current rises, the source takes of the gate and body voltages, and both resistances of the drain's.
+  return toGate / (1 + (toGate - toBody) * source + toDrain * (drain + source));
 }
 
 /** I_D at V_GS = 0, A. */
@@ -158,8 +165,8 @@ export function zeroBiasCurrent(
   temperature: number,
 ): number {
   const { current, drain, source } = prepare(law, channel, temperature);
-  const most = current(0, drainToSource);
+  const most = current(0, drainToSource, 0);
   if (drain + source === 0 || most === 0) return most;
-  const excess = (i: number) => current(-i * source, drainToSource - i * (drain + source)) - i;
+  const excess = (i: number) => current(-i * source, drainToSource - i * (drain + source), i * source) - i;
   return findRoot(excess, 0, most) ?? most;
 }
