@@ -3,7 +3,6 @@
  * transistor or a diode.
  */
 import type { Box } from '../../symbols/art.ts';
-import { badgeClearance } from './badge/badge.ts';
 import { badgeSize } from './badge/curves.ts';
 import { boxAt, grown, union, type Point } from './boxes.ts';
 import { facingOf } from './lettering/facing.ts';
@@ -20,11 +19,13 @@ export interface BadgePlace {
 /** From the frame to the word. */
 const besideFrame = 11;
 const fromBody = 15;
+/** The second frame of a missed duty, and a little air. */
+const frameReach = 5;
 const { width, height } = badgeSize;
 
 /** Boxes a placed badge takes: the frame with what a missed duty draws round it, and the words. */
 export const badgeBoxes = ({ corner: [x, y], words }: BadgePlace): readonly Box[] => [
-  grown(boxAt(x, y, width, height), badgeClearance - 2),
+  grown(boxAt(x, y, width, height), frameReach),
   grown(blockBox(words), 2.5),
 ];
 
@@ -54,37 +55,47 @@ const block = (corner: Point, lines: readonly TextLine[], side: Words, cost: num
   }
 };
 
-/** Shifts along the side of the part, with what each costs. */
-const along = [0, 6, -6, 12, -12, 18, -18, 24, -24, 30, -30, 36, -36, 42, -42];
-/** Steps away from the part. */
-const away = [0, 6, 12, 24, 36, 48, 72, 96, 120];
+/** Shifts along the side of the part, and steps away from it. */
+const along = [0, 6, -6, 12, -12, 18, -18, 24, -24, 36, -36];
+const away = [0, 6, 12, 24, 42, 66, 96];
 
+type Side = 'left' | 'right' | 'up' | 'down';
+
+/** What each side costs by the side that the part likes best: the opposite one is better than going round a corner. */
+const dislike = (side: Side, liked: Side): number => {
+  if (side === liked) return 0;
+  const isLevel = (one: Side) => one === 'left' || one === 'right';
+  if (isLevel(side) !== isLevel(liked)) return isLevel(liked) ? 16 : 9;
+  return isLevel(liked) ? 12 : 3;
+};
+
+/** Best first. */
 export const badgePlaces = (part: ScenePart, lines: readonly TextLine[]): readonly BadgePlace[] => {
   const { body, origin } = part;
   const facing = facingOf(part);
-  const liked = facing.form === 'transistor' ? facing.away : facing.form === 'lying' ? 'up' : 'right';
+  const liked: Side = facing.form === 'transistor' ? facing.away : facing.form === 'lying' ? 'up' : 'right';
   // A diode's name is at its side; a transistor's is over the badge.
   const level = origin[1] - (facing.form === 'transistor' ? 16 : 20);
-  const places = away.flatMap((way) =>
-    along.flatMap((shift): BadgePlace[] => {
+  const places: BadgePlace[] = [];
+  for (const way of away) {
+    for (const shift of along) {
       const cost = way * 0.35 + Math.abs(shift) * 0.3;
-      const beside = (side: 'right' | 'left'): readonly BadgePlace[] => {
-        const dislike = side === liked ? 0 : liked === 'up' || liked === 'down' ? 9 : 12;
+      for (const side of ['right', 'left'] as const) {
         const x = side === 'right' ? body.right + fromBody + way : body.left - fromBody - width - way;
-        return [
-          block([x, level + shift], lines, side, cost + dislike),
-          block([x, level + shift], lines, 'under', cost + dislike),
-        ];
-      };
-      const level2 = (side: 'up' | 'down'): readonly BadgePlace[] => {
-        const dislike = side === liked ? 0 : liked === 'up' || liked === 'down' ? 3 : 16;
-        const y = side === 'up' ? body.top - 20 - way - height : body.bottom + 20 + way;
-        return [-60, -30, 0].map((column) =>
-          block([origin[0] + column + shift, y], lines, 'right', cost + dislike + (column === -30 ? 0 : 1)),
+        const worth = cost + dislike(side, liked);
+        places.push(
+          block([x, level + shift], lines, side, worth),
+          block([x, level + shift], lines, 'under', worth),
         );
-      };
-      return [...beside('right'), ...beside('left'), ...level2('up'), ...level2('down')];
-    }),
-  );
+      }
+      for (const side of ['up', 'down'] as const) {
+        const y = side === 'up' ? body.top - 20 - way - height : body.bottom + 20 + way;
+        for (const column of [-60, -30, 0]) {
+          const worth = cost + dislike(side, liked) + (column === -30 ? 0 : 1);
+          places.push(block([origin[0] + column + shift, y], lines, 'right', worth));
+        }
+      }
+    }
+  }
   return places.sort((a, b) => a.cost - b.cost);
 };

@@ -15,8 +15,8 @@ type Weight = 400 | 600;
 
 /** Heights above and depth below the baseline, em: capitals and figures, tall letters, the tails of letters. */
 export const capHeight = 0.66;
-const ascent = 0.74;
-const descent = 0.22;
+export const ascent = 0.74;
+export const descent = 0.22;
 
 /** Width of a character that the table lacks, em: that of the widest common letter, so that room is left. */
 const unknownWidth = 0.85;
@@ -40,11 +40,19 @@ const tableOf = (weight: Weight): ReadonlyMap<number, number> => {
 export const isCovered = (text: string, weight: Weight): boolean =>
   Array.from(text).every((character) => tableOf(weight).has(character.codePointAt(0) ?? 0));
 
+/** Widths already worked out, em. The same few names and figures are measured again and again. */
+const measured: Readonly<Record<Weight, Map<string, number>>> = { 400: new Map(), 600: new Map() };
+const mostMeasured = 4000;
+
 /** Width of one line of text, pixels. */
 export const textWidth = (text: string, size: number, weight: Weight = 400): number => {
+  const known = measured[weight].get(text);
+  if (known !== undefined) return known * size;
   const table = tableOf(weight);
   let width = 0;
   for (const character of text) width += table.get(character.codePointAt(0) ?? 0) ?? unknownWidth;
+  if (measured[weight].size >= mostMeasured) measured[weight].clear();
+  measured[weight].set(text, width);
   return width * size;
 };
 

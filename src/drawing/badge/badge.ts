@@ -28,8 +28,6 @@ export interface BadgeSign {
 
 const thin = 1.25;
 const heavy = 3.5;
-/** Room to keep clear round a badge: the second frame and the bar of a missed duty reach this far out. */
-export const badgeClearance = 8;
 
 /** The badge of one device, its upper left corner at `corner`; ids `<id>/…`. */
 export const badgeShapes = (

@@ -86,7 +86,7 @@ const ends = (lines: Lines, body: Box): readonly TextBlock[] => {
 
 const single = (side: 'up' | 'down' | 'left' | 'right', runs: TextLine, body: Box): readonly TextBlock[] => {
   const [x, y] = middle(body);
-  const level = side === 'up' ? body.top - overBody + 1 : body.bottom + overBody - 1;
+  const level = side === 'up' ? body.top - overBody - 1 : body.bottom + overBody + 1;
   const centred = shifts.map((shift): TextBlock => ({
     lines: [runs],
     at: [x + shift, level],

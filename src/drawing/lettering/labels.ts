@@ -1,5 +1,5 @@
 import type { Box } from '../../../symbols/art.ts';
-import { badgeBlock, badgePlaces } from '../badgeRoom.ts';
+import { badgeBlock, badgeBoxes, badgePlaces } from '../badgeRoom.ts';
 import { grown, overlap } from '../boxes.ts';
 import type { Occupancy } from '../occupancy.ts';
 import { Occupancy as Rooms } from '../occupancy.ts';
@@ -47,13 +47,14 @@ const withBadge = (
   occupancy: Occupancy,
   kept: Rooms,
 ): TextBlock | undefined => {
-  const room = badgePlaces(part, likelyWords)
-    .map(badgeBlock)
-    .find((box) => occupancy.isFree(box) && kept.isFree(box));
-  if (room === undefined) return undefined;
+  const isFree = (box: Box): boolean => occupancy.isFree(box) && kept.isFree(box);
+  const badge = badgePlaces(part, likelyWords).find((place) => badgeBoxes(place).every(isFree));
+  if (badge === undefined) return undefined;
+  const room = badgeBlock(badge);
   const place = places.find((block) => {
-    const box = grown(blockBox(block), air);
-    return occupancy.isFree(box) && kept.isFree(box) && !overlap(box, room);
+    const box = blockBox(block);
+    const roomy = grown(box, air);
+    return isFree(roomy) && !overlap(box, room);
   });
   if (place === undefined) return undefined;
   kept.add(room, `badge/${part.id}`);

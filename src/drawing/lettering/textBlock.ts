@@ -1,6 +1,6 @@
 import type { Box } from '../../../symbols/art.ts';
-import { union, type Point } from '../boxes.ts';
-import { baselineBelowMiddle, textBox, textWidth } from '../fontMetrics.ts';
+import type { Point } from '../boxes.ts';
+import { ascent, baselineBelowMiddle, descent, textWidth } from '../fontMetrics.ts';
 import type { Belonging, Primitive, Role, TextPrimitive } from '../primitives.ts';
 
 /** A piece of a line in one weight. */
@@ -52,11 +52,24 @@ const placedRuns = ({ lines, at: [x, y], align, size }: TextBlock): readonly Pla
     });
   });
 
+/** Width and height of a block, tails and tall letters included. */
+export const blockExtent = (
+  lines: readonly TextLine[],
+  size: number,
+): { readonly width: number; readonly above: number; readonly below: number } => {
+  let width = 0;
+  for (const line of lines) width = Math.max(width, lineWidth(line, size));
+  const half = ((lines.length - 1) / 2) * lineHeight;
+  const baseline = baselineBelowMiddle(size);
+  return { width, above: half + ascent * size - baseline, below: half + descent * size + baseline };
+};
+
 /** The box of a block, tails included. */
-export const blockBox = (block: TextBlock): Box =>
-  union(
-    placedRuns(block).map(({ run, x, y }) => textBox({ ...run, x, y, size: block.size, align: 'left' })),
-  ) ?? { left: block.at[0], top: block.at[1], right: block.at[0], bottom: block.at[1] };
+export const blockBox = ({ lines, at: [x, y], align, size }: TextBlock): Box => {
+  const { width, above, below } = blockExtent(lines, size);
+  const left = align === 'left' ? x : align === 'right' ? x - width : x - width / 2;
+  return { left, top: y - above, right: left + width, bottom: y + below };
+};
 
 /** Room of a block of so many lines above and below its middle. */
 export const blockHeight = (lines: number, size: number): number => (lines - 1) * lineHeight + size;

@@ -21,11 +21,12 @@ export const badgeSeeker = (
   if (dragged !== undefined && first !== undefined) {
     return { id: `badge/${badge.part.id}`, places: [movedTo(first, dragged)], fixed: true };
   }
-  const sought = places.map((place): SoughtBadge => {
+  const sought = places.flatMap((place): SoughtBadge[] => {
     const boxes = badgeBoxes(place);
+    if (!boxes.every((box) => occupancy.isFree(box))) return [];
     const whole = union(boxes) ?? { left: 0, top: 0, right: 0, bottom: 0 };
     const room = occupancy.clearance(whole, clearanceWanted);
-    return { ...place, boxes, shares: [], cost: place.cost + (clearanceWanted - room) * 0.4 };
+    return [{ ...place, boxes, shares: [], cost: place.cost + (clearanceWanted - room) * 0.4 }];
   });
   return { id: `badge/${badge.part.id}`, places: sought.sort((a, b) => a.cost - b.cost) };
 };

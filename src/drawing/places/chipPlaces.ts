@@ -12,7 +12,7 @@ const padding = 7;
 /** Clear paper round a chip. */
 const air = 4;
 /** A leader starts where the line's own stroke ends. */
-const fromLine = 2;
+const fromLine = 3;
 
 export interface ChipPlace extends Place {
   readonly chip: Box;
@@ -23,11 +23,16 @@ export interface ChipPlace extends Place {
 
 export const chipWidth = (text: string): number => textWidth(text, 13) + 2 * padding;
 
-/** Leaders are 20 to 28 px long; others only where these find no room. */
-const leaders: readonly (readonly [number, number])[] = [
+type Leaders = readonly (readonly [number, number])[];
+
+/** Leaders are 20 to 28 px long. */
+const usual: Leaders = [
   [24, 0],
   [20, 0.5],
   [28, 0.5],
+];
+/** Others, only where these find little room. */
+const unusual: Leaders = [
   [16, 5],
   [34, 5],
   [40, 7],
@@ -37,32 +42,41 @@ const leaders: readonly (readonly [number, number])[] = [
   [84, 19],
   [100, 24],
 ];
+/** So many places of the usual kind are choice enough. */
+const enough = 40;
 
 const clearanceWanted = 14;
 
 export const chipPlaces = (chip: WantedChip, occupancy: Occupancy): readonly ChipPlace[] => {
   const width = chipWidth(chip.text);
-  return chip.node.pieces
-    .flatMap((piece) => piece.stretches.flatMap((_, stretch) => spotsOn(piece, stretch)))
-    .flatMap((spot) => placesAt(spot, width, occupancy))
-    .sort((a, b) => a.cost - b.cost);
+  const spots = chip.node.pieces.flatMap((piece) =>
+    piece.stretches.flatMap((_, stretch) => spotsOn(piece, stretch)),
+  );
+  const near = spots.flatMap((spot) => placesAt(spot, width, usual, occupancy));
+  const far = near.length >= enough ? [] : spots.flatMap((spot) => placesAt(spot, width, unusual, occupancy));
+  return [...near, ...far].sort((a, b) => a.cost - b.cost);
 };
 
-const placesAt = (spot: Spot, width: number, occupancy: Occupancy): readonly ChipPlace[] => {
+const placesAt = (
+  spot: Spot,
+  width: number,
+  leaders: Leaders,
+  occupancy: Occupancy,
+): readonly ChipPlace[] => {
   const base = spotCost(spot);
-  return [-1, 1].flatMap((side) =>
-    leaders.flatMap(([length, longer]) =>
-      slides(spot, width).flatMap(([slide, aside]): ChipPlace[] => {
+  const places: ChipPlace[] = [];
+  for (const side of [-1, 1]) {
+    for (const [length, longer] of leaders) {
+      for (const [slide, aside] of slides(spot, width)) {
         const place = standAt(spot, width, side * length, slide);
-        const [chip, leader] = place.boxes;
-        if (chip === undefined || leader === undefined) return [];
-        if (!occupancy.isFree(chip) || !occupancy.isFree(leader)) return [];
+        if (!place.boxes.every((box) => occupancy.isFree(box))) continue;
         const room = occupancy.clearance(place.chip, clearanceWanted);
         const cost = base + longer + aside + (side > 0 ? 0.4 : 0) + (clearanceWanted - room) * 0.5;
-        return [{ ...place, cost }];
-      }),
-    ),
-  );
+        places.push({ ...place, cost });
+      }
+    }
+  }
+  return places;
 };
 
 /** In the middle of a long straight line, away from its corners and from parts. */

@@ -16,9 +16,12 @@ export interface Spot {
   readonly stretch: number;
 }
 
-const step = 6;
+/** Spots are this far apart, farther on a long line, where a few pixels make no difference. */
+const fine = 6;
+const coarse = 12;
+const long = 240;
 
-/** Spots every 6 px along a stretch, leads of parts in line with it included. */
+/** Spots along a stretch, leads of parts in line with it included. */
 export const spotsOn = (piece: Piece, stretch: number): readonly Spot[] => {
   const { from, to } = piece.stretches[stretch] ?? { from: 0, to: 0 };
   const [a, b] = [piece.vertices[from], piece.vertices[to]];
@@ -30,6 +33,7 @@ export const spotsOn = (piece: Piece, stretch: number): readonly Spot[] => {
   const start = extended(a, b.at, owners);
   const end = extended(b, a.at, owners);
   const [low, high] = [Math.min(start[axis], end[axis]), Math.max(start[axis], end[axis])];
+  const step = high - low > long ? coarse : fine;
   const spots: Spot[] = [];
   // On multiples of the step, whichever end comes first: a spot never depends on the way the wire was drawn.
   for (let way = Math.ceil(low / step) * step; way <= high; way += step) {

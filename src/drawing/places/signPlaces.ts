@@ -22,6 +22,7 @@ export const signPlaces = (part: ScenePart, occupancy: Occupancy): readonly Sign
       const cost = out * 0.5 + Math.abs(shift) * 0.3;
       const add = (centre: Point, dislike: number): void => {
         const box = centredBox(centre, 2 * signReach, 2 * signReach);
+        if (!occupancy.isFree(grown(box, air))) return;
         const room = occupancy.clearance(box, 8);
         const way = distance(box, body) * 0.1;
         places.push({

@@ -23,6 +23,6 @@ export const badgeWithWords = (
   const id = `badge/${badge.part.id}`;
   return [
     ...badgeShapes(id, badge.part.id, { ...badge.sign, stale }, corner),
-    ...blockTexts(words, id, badge.part.id, 'readings', stale),
+    ...blockTexts({ ...words, lines: badgeLines(badge, stale) }, id, badge.part.id, 'readings', stale),
   ];
 };
