@@ -69,30 +69,37 @@ const dislike = (side: Side, liked: Side): number => {
   return isLevel(liked) ? 12 : 3;
 };
 
-/** Best first. */
-export const badgePlaces = (part: ScenePart, lines: readonly TextLine[]): readonly BadgePlace[] => {
+/** How far round a part a place for its badge is looked for. */
+export type Reach = 'near' | 'anywhere';
+
+/** Best first. `near` keeps to the side that the part likes best. */
+export const badgePlaces = (
+  part: ScenePart,
+  lines: readonly TextLine[],
+  reach: Reach,
+): readonly BadgePlace[] => {
   const { body, origin } = part;
   const facing = facingOf(part);
   const liked: Side = facing.form === 'transistor' ? facing.away : facing.form === 'lying' ? 'up' : 'right';
   // A diode's name is at its side; a transistor's is over the badge.
   const level = origin[1] - (facing.form === 'transistor' ? 16 : 20);
+  const sides: readonly Side[] = reach === 'near' ? [liked] : ['right', 'left', 'up', 'down'];
   const places: BadgePlace[] = [];
-  for (const way of away) {
+  for (const way of reach === 'near' ? away.slice(0, 3) : away) {
     for (const shift of along) {
       const cost = way * 0.35 + Math.abs(shift) * 0.3;
-      for (const side of ['right', 'left'] as const) {
-        const x = side === 'right' ? body.right + fromBody + way : body.left - fromBody - width - way;
+      for (const side of sides) {
         const worth = cost + dislike(side, liked);
-        places.push(
-          block([x, level + shift], lines, side, worth),
-          block([x, level + shift], lines, 'under', worth),
-        );
-      }
-      for (const side of ['up', 'down'] as const) {
-        const y = side === 'up' ? body.top - 20 - way - height : body.bottom + 20 + way;
-        for (const column of [-60, -30, 0]) {
-          const worth = cost + dislike(side, liked) + (column === -30 ? 0 : 1);
-          places.push(block([origin[0] + column + shift, y], lines, 'right', worth));
+        if (side === 'right' || side === 'left') {
+          const x = side === 'right' ? body.right + fromBody + way : body.left - fromBody - width - way;
+          places.push(block([x, level + shift], lines, side, worth));
+          places.push(block([x, level + shift], lines, 'under', worth));
+        } else {
+          const y = side === 'up' ? body.top - 20 - way - height : body.bottom + 20 + way;
+          for (const column of [-60, -30, 0]) {
+            const corner = [origin[0] + column + shift, y] as const;
+            places.push(block(corner, lines, 'right', worth + (column === -30 ? 0 : 1)));
+          }
         }
       }
     }

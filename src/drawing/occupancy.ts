@@ -29,6 +29,14 @@ export class Occupancy {
     else owned.push(occupant);
   }
 
+  /** The same room, to be filled on without touching this one. */
+  copy(): Occupancy {
+    const copy = new Occupancy();
+    for (const [key, list] of this.#cells) copy.#cells.set(key, [...list]);
+    for (const [owner, list] of this.#owned) copy.#owned.set(owner, [...list]);
+    return copy;
+  }
+
   remove(owner: string): void {
     for (const occupant of this.#owned.get(owner) ?? none) {
       for (const key of cellsOf(occupant.box)) {

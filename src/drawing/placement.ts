@@ -19,7 +19,7 @@ export interface WantedSign {
   readonly part: ScenePart | undefined;
 }
 
-/** Places by the ids of the readings: `chip/Q1.drain`, `current/R1.current`, `badge/p3`, `snag/1`. */
+/** Places by the ids of the readings: `chip/p3.drain`, `current/p4`, `badge/p3`, `snag/1`. */
 export interface Placement {
   readonly chips: ReadonlyMap<string, ChipPlace>;
   readonly currents: ReadonlyMap<string, ChevronPlace>;
@@ -71,12 +71,11 @@ export const placeReadings = (
     ...wanted.chips.map((chip) => {
       const to = dragged.get(chip.name);
       const place = to === undefined ? undefined : draggedChipPlace(chip, to);
-      const id = `chip/${chip.name}`;
-      if (place !== undefined) return { id, places: [place], fixed: true };
-      return { id, places: chipPlaces(chip, occupancy) };
+      if (place !== undefined) return { id: chip.id, places: [place], fixed: true };
+      return { id: chip.id, places: chipPlaces(chip, occupancy) };
     }),
     ...wanted.currents.map((current) => ({
-      id: `current/${current.name}`,
+      id: current.id,
       places: chevronPlaces(current, wiring, occupancy),
     })),
   ];

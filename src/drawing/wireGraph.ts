@@ -17,6 +17,8 @@ export interface Stretch {
   /** Indices into the piece's `vertices`. */
   readonly from: number;
   readonly to: number;
+  /** A wire that runs here; the first where there are several. */
+  readonly wire: string;
 }
 
 export interface Piece {
@@ -93,7 +95,8 @@ const pieceOf = ({ index, wires, parts }: Group): Piece => {
           point === undefined ? undefined : order.get(keyOf(point)),
         );
         if (a === undefined || b === undefined) continue;
-        stretches.set(a < b ? `${a}-${b}` : `${b}-${a}`, { from: a, to: b });
+        const key = a < b ? `${a}-${b}` : `${b}-${a}`;
+        if (!stretches.has(key)) stretches.set(key, { from: a, to: b, wire: wire.id });
       }
     }
   }

@@ -1,5 +1,5 @@
 import type { Box } from '../../../symbols/art.ts';
-import { badgeBlock, badgeBoxes, badgePlaces } from '../badgeRoom.ts';
+import { badgeBlock, badgeBoxes, badgePlaces, type Reach } from '../badgeRoom.ts';
 import { grown, overlap } from '../boxes.ts';
 import type { Occupancy } from '../occupancy.ts';
 import { Occupancy as Rooms } from '../occupancy.ts';
@@ -48,7 +48,9 @@ const withBadge = (
   kept: Rooms,
 ): TextBlock | undefined => {
   const isFree = (box: Box): boolean => occupancy.isFree(box) && kept.isFree(box);
-  const badge = badgePlaces(part, likelyWords).find((place) => badgeBoxes(place).every(isFree));
+  const roomIn = (reach: Reach) =>
+    badgePlaces(part, likelyWords, reach).find((place) => badgeBoxes(place).every(isFree));
+  const badge = roomIn('near') ?? roomIn('anywhere');
   if (badge === undefined) return undefined;
   const room = badgeBlock(badge);
   const place = places.find((block) => {

@@ -10,25 +10,31 @@ export type SoughtBadge = Place & BadgePlace;
 /** Clear paper round the words. */
 const clearanceWanted = 10;
 
+/** So many places close by are choice enough. */
+const enough = 24;
+
 export const badgeSeeker = (
   badge: WantedBadge,
   occupancy: Occupancy,
   dragged: Point | undefined,
 ): Seeker<SoughtBadge> => {
   const lines = badgeLines(badge, false);
-  const places = badgePlaces(badge.part, lines);
-  const first = places[0];
+  const near = badgePlaces(badge.part, lines, 'near');
+  const [first] = near;
   if (dragged !== undefined && first !== undefined) {
-    return { id: `badge/${badge.part.id}`, places: [movedTo(first, dragged)], fixed: true };
+    return { id: badge.id, places: [movedTo(first, dragged)], fixed: true };
   }
-  const sought = places.flatMap((place): SoughtBadge[] => {
-    const boxes = badgeBoxes(place);
-    if (!boxes.every((box) => occupancy.isFree(box))) return [];
-    const whole = union(boxes) ?? { left: 0, top: 0, right: 0, bottom: 0 };
-    const room = occupancy.clearance(whole, clearanceWanted);
-    return [{ ...place, boxes, shares: [], cost: place.cost + (clearanceWanted - room) * 0.4 }];
-  });
-  return { id: `badge/${badge.part.id}`, places: sought.sort((a, b) => a.cost - b.cost) };
+  const free = (places: readonly BadgePlace[]): SoughtBadge[] =>
+    places.flatMap((place): SoughtBadge[] => {
+      const boxes = badgeBoxes(place);
+      if (!boxes.every((box) => occupancy.isFree(box))) return [];
+      const whole = union(boxes) ?? { left: 0, top: 0, right: 0, bottom: 0 };
+      const room = occupancy.clearance(whole, clearanceWanted);
+      return [{ ...place, boxes, shares: [], cost: place.cost + (clearanceWanted - room) * 0.4 }];
+    });
+  const close = free(near);
+  const places = close.length >= enough ? close : free(badgePlaces(badge.part, lines, 'anywhere'));
+  return { id: badge.id, places: places.sort((a, b) => a.cost - b.cost) };
 };
 
 const movedTo = (place: BadgePlace, corner: Point): SoughtBadge => {

@@ -2,6 +2,7 @@
 import { grown, type Point } from '../boxes.ts';
 import { blockBox, type TextBlock } from '../lettering/textBlock.ts';
 import type { Occupancy } from '../occupancy.ts';
+import type { Run } from '../branches.ts';
 import type { WantedCurrent } from '../wanted/wanted.ts';
 import type { Piece } from '../wireGraph.ts';
 import { spotsOn, type Spot } from './onLines.ts';
@@ -16,9 +17,11 @@ const fromEnd = 12;
 const clearanceWanted = 12;
 
 export interface ChevronPlace extends Place {
-  /** The middle of the chevron, on the line, and the unit direction in which it points. */
+  /** The middle of the chevron, on the line. */
   readonly at: Point;
-  readonly direction: Point;
+  readonly run: Run;
+  /** Unit direction of the stretch from its `from` to its `to`. */
+  readonly along: Point;
   readonly figure: TextBlock;
 }
 
@@ -28,25 +31,23 @@ export const chevronPlaces = (
   occupancy: Occupancy,
 ): readonly ChevronPlace[] =>
   current.runs
-    .flatMap(({ piece: index, stretch, forward }) => {
+    .flatMap(({ piece: index, stretch }) => {
       const piece = wiring[index];
       if (piece === undefined) return [];
-      const direction = directionOf(piece, stretch, forward);
-      return spotsOn(piece, stretch).flatMap((spot) => placesAt(spot, direction, current.text, occupancy));
+      const seat = { run: { piece: index, stretch }, along: directionOf(piece, stretch) };
+      return spotsOn(piece, stretch).flatMap((spot) => placesAt(spot, seat, current.text, occupancy));
     })
     .sort((a, b) => a.cost - b.cost);
 
-const directionOf = (piece: Piece, stretch: number, forward: boolean): Point => {
+const directionOf = (piece: Piece, stretch: number): Point => {
   const { from, to } = piece.stretches[stretch] ?? { from: 0, to: 0 };
   const [a, b] = [piece.vertices[from]?.at ?? [0, 0], piece.vertices[to]?.at ?? [0, 0]];
-  const way = forward ? 1 : -1;
-  const against = (value: number) => (value === 0 ? 0 : Math.sign(value) * way);
-  return [against(b[0] - a[0]), against(b[1] - a[1])];
+  return [Math.sign(b[0] - a[0]), Math.sign(b[1] - a[1])];
 };
 
 const placesAt = (
   spot: Spot,
-  direction: Point,
+  seat: Pick<ChevronPlace, 'run' | 'along'>,
   text: string,
   occupancy: Occupancy,
 ): readonly ChevronPlace[] => {
@@ -75,6 +76,6 @@ const placesAt = (
       (spot.level ? 2 : 0) +
       (clearanceWanted - room) * 0.4 +
       Math.max(0, 20 - spot.fromEnd) * 0.2;
-    return [{ at: spot.at, direction, figure, boxes: [mark, grown(box, air)], cost, shares }];
+    return [{ ...seat, at: spot.at, figure, boxes: [mark, grown(box, air)], cost, shares }];
   });
 };

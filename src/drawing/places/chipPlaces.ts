@@ -89,10 +89,8 @@ const slides = ({ level }: Spot, width: number): readonly (readonly [number, num
   const most = width / 2 - 10;
   return [
     [0, 0],
-    [most / 2, 2],
-    [-most / 2, 2],
-    [most, 3],
-    [-most, 3],
+    [most, 2.5],
+    [-most, 2.5],
   ];
 };
 

@@ -19,7 +19,7 @@ export interface Spot {
 /** Spots are this far apart, farther on a long line, where a few pixels make no difference. */
 const fine = 6;
 const coarse = 12;
-const long = 240;
+const long = 96;
 
 /** Spots along a stretch, leads of parts in line with it included. */
 export const spotsOn = (piece: Piece, stretch: number): readonly Spot[] => {

@@ -20,7 +20,7 @@ export const badgeWithWords = (
   { corner, words }: BadgePlace,
   stale: boolean,
 ): readonly Primitive[] => {
-  const id = `badge/${badge.part.id}`;
+  const { id } = badge;
   return [
     ...badgeShapes(id, badge.part.id, { ...badge.sign, stale }, corner),
     ...blockTexts({ ...words, lines: badgeLines(badge, stale) }, id, badge.part.id, 'readings', stale),

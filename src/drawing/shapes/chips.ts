@@ -13,9 +13,9 @@ export const chipShapes = (
   { chip: box, anchor, end }: ChipPlace,
   stale: boolean,
 ): readonly Primitive[] => {
-  const id = `chip/${chip.name}`;
+  const { id } = chip;
   const role = stale ? 'soft' : 'read';
-  const belonging = { of: chip.name, layer: 'readings' } as const;
+  const belonging = { of: chip.node.pins[0]?.part.id ?? '', layer: 'readings' } as const;
   const [x, y] = middle(box);
   return [
     {

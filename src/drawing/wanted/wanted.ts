@@ -10,7 +10,7 @@ import type {
 import { formatQuantity } from '../../values/format.ts';
 import { badgeWords } from '../badge/words.ts';
 import type { BadgeSign } from '../badge/badge.ts';
-import { branchesOf, type Run } from '../branches.ts';
+import { branchesOf, type Branch, type Run } from '../branches.ts';
 import { lineCurrents, pinCurrentsOf } from '../lineCurrents.ts';
 import type { Scene, ScenePart } from '../scene.ts';
 import type { Piece } from '../wireGraph.ts';
@@ -20,6 +20,8 @@ import { nodesOf, type SceneNode } from './nodes.ts';
 export type Density = 'all' | 'key' | 'none';
 
 export interface WantedChip {
+  /** Of its own in the drawing: `chip/p3.drain`. */
+  readonly id: string;
   /** As the readings name it: `Q1.drain`. */
   readonly name: string;
   readonly node: SceneNode;
@@ -29,6 +31,10 @@ export interface WantedChip {
 }
 
 export interface WantedCurrent {
+  /** Of its own in the drawing: `current/p4`, `current/p6.emitter`, `current/w3.0`. */
+  readonly id: string;
+  /** Id of the part or wire concerned. */
+  readonly of: string;
   /** `R1.current`. */
   readonly name: string;
   /** Stretches on which the figure may stand, and which way the current runs on each (from its `from` or against). */
@@ -37,6 +43,8 @@ export interface WantedCurrent {
 }
 
 export interface WantedBadge {
+  /** Of its own in the drawing: `badge/p3`. */
+  readonly id: string;
   /** `Q1`. */
   readonly name: string;
   readonly part: ScenePart;
@@ -87,12 +95,13 @@ const wantedChip = (node: SceneNode, state: SettledState): readonly WantedChip[]
   if (first === undefined) return [];
   const name = `${first.part.key}.${first.pin}`;
   const volts = state.pins[name] ?? null;
-  return [{ name, node, volts, text: volts === null ? notFixed : voltsText(volts) }];
+  const text = volts === null ? notFixed : voltsText(volts);
+  return [{ id: `chip/${first.part.id}.${first.pin}`, name, node, volts, text }];
 };
 
 const wantedBadge = (part: ScenePart, reading: PartReading | undefined): readonly WantedBadge[] => {
   if (reading === undefined) return [];
-  const base = { name: part.key, part };
+  const base = { id: `badge/${part.id}`, name: part.key, part };
   if (isMosfet(reading)) {
     if (reading.region === null) return [];
     const { region, reversed, inversion, verdict } = reading;
@@ -154,20 +163,30 @@ const wantedCurrents = (
     });
     const [first] = runs;
     if (first === undefined) return [];
-    const named = branch.through.find(({ label }) => label !== undefined);
-    const end = branch.endsAt[0];
-    const name =
-      named !== undefined
-        ? `${named.key}.current`
-        : end !== undefined
-          ? `${end.part.key}.${end.pin}.current`
-          : `${wiring[first.piece]?.wires[0] ?? ''}.current`;
     return [
       {
-        name,
+        ...nameOf(branch, wiring),
         runs: runs.map(({ piece, stretch, amperes }) => ({ piece, stretch, forward: amperes > 0 })),
         text: amperesText(Math.abs(first.amperes)),
       },
     ];
   });
+};
+
+/** By the part passed through, else by the pin at which the branch ends, else by a wire. */
+const nameOf = (
+  { through, endsAt, runs }: Branch,
+  wiring: readonly Piece[],
+): Pick<WantedCurrent, 'id' | 'of' | 'name'> => {
+  const named = through.find(({ label }) => label !== undefined);
+  if (named !== undefined) return { id: `current/${named.id}`, of: named.id, name: `${named.key}.current` };
+  const [end] = endsAt;
+  if (end !== undefined) {
+    const { part, pin } = end;
+    return { id: `current/${part.id}.${pin}`, of: part.id, name: `${part.key}.${pin}.current` };
+  }
+  const { piece = 0, stretch = 0 } = runs[0] ?? {};
+  const wire = wiring[piece]?.stretches[stretch]?.wire ?? '';
+  // One wire may be part of several branches.
+  return { id: `current/${wire}.${stretch}`, of: wire, name: `${wire}.current` };
 };
