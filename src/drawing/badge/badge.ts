@@ -14,6 +14,7 @@ import {
   type Family,
 } from './curves.ts';
 import { frameStrokes } from './frame.ts';
+import { markedInversion } from './words.ts';
 
 export interface BadgeSign {
   readonly family: Family;
@@ -47,9 +48,10 @@ export const badgeShapes = (
   const belonging = { of, layer: 'readings', thing: 'badge' } as const;
 
   const { commands, dot, at, farAt, over } = heavyParts[sign.region];
-  const isBroken = sign.inversion === 'weak' || sign.inversion === 'moderate';
+  const inversion = markedInversion(sign);
   const thinShapes = thinCurves[sign.family].flatMap((curve, index): Primitive[] =>
-    isBroken && index === over
+    // What the heavy part covers, or breaks, is not drawn under it.
+    index === over && (inversion !== undefined || curve === commands)
       ? []
       : [
           {
@@ -75,7 +77,7 @@ export const badgeShapes = (
     ...(stroke.dash === undefined ? {} : { dash: stroke.dash }),
   }));
   const heavyShapes: readonly Primitive[] =
-    sign.inversion === 'weak'
+    inversion === 'weak'
       ? dotCentres(points).map(([x, y], index): Primitive => ({
           ...belonging,
           kind: 'circle',
@@ -86,7 +88,7 @@ export const badgeShapes = (
           fill: strong,
           width: 0,
         }))
-      : sign.inversion === 'moderate'
+      : inversion === 'moderate'
         ? dashOutlines(points, heavy).map((outline, index): Primitive => ({
             ...belonging,
             kind: 'path',
@@ -109,7 +111,7 @@ export const badgeShapes = (
     ...frames,
     ...thinShapes,
     ...heavyShapes,
-    ...dotShapes(`${id}/dot`, of, dot, place(isBroken ? farAt : at), strong, ground),
+    ...dotShapes(`${id}/dot`, of, dot, place(inversion === undefined ? at : farAt), strong, ground),
     ...(stale ? [strike(id, of, corner)] : []),
   ];
 };
