@@ -27,7 +27,8 @@ const dutyCells = (reading: DutyReading): readonly string[] => [
 const details = (entries: readonly (readonly [label: string, text: string])[]): string =>
   entries
     .filter(([, text]) => text !== '')
-    .map(([label, text]) => `${label} ${text}`)
+    // A figure and its unit stay on one line.
+    .map(([label, text]) => `${label} ${text.replaceAll(' ', '\u00a0')}`)
     .join(', ');
 
 /** The row of each transistor, with its further figures and reasons under it. */
