@@ -55,9 +55,9 @@ const block = (corner: Point, lines: readonly TextLine[], side: Words, cost: num
   }
 };
 
-/** Shifts along the side of the part, and steps away from it. */
+/** Shifts along the side of the part, and steps away from it. Farther off, nobody could tell whose badge it is. */
 const along = [0, 6, -6, 12, -12, 18, -18, 24, -24, 36, -36];
-const away = [0, 6, 12, 24, 42, 66, 96];
+const away = [0, 6, 12, 24, 36];
 
 type Side = 'left' | 'right' | 'up' | 'down';
 

@@ -35,7 +35,7 @@ export const labelPlaces = (part: ScenePart): readonly TextBlock[] => {
     case 'transistor':
       return transistor(facing.away, runs, body, origin);
     case 'block':
-      return block(runs, body);
+      return block(runs, body, origin);
   }
 };
 
@@ -148,15 +148,16 @@ const transistor = (
 };
 
 /** Amplifiers and the like: over the upper right of the body, clear of a supply lead in its middle. */
-const block = (runs: TextLine, body: Box): readonly TextBlock[] => {
+const block = (runs: TextLine, body: Box, origin: readonly [number, number]): readonly TextBlock[] => {
   const [x] = middle(body);
-  const over = body.top - overBody + 3;
-  const under = body.bottom + overBody - 3;
+  const over = body.top - overBody;
+  const under = body.bottom + overBody;
   return [
     { lines: [runs], at: [x + 6, over], align: 'left', size },
     { lines: [runs], at: [x + 6, under], align: 'left', size },
     { lines: [runs], at: [x - 6, over], align: 'right', size },
     { lines: [runs], at: [x - 6, under], align: 'right', size },
+    ...beside([runs], body, origin),
     ...across([runs], body),
   ];
 };

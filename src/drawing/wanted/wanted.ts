@@ -186,7 +186,10 @@ const nameOf = (
     return { id: `current/${part.id}.${pin}`, of: part.id, name: `${part.key}.${pin}.current` };
   }
   const { piece = 0, stretch = 0 } = runs[0] ?? {};
-  const wire = wiring[piece]?.stretches[stretch]?.wire ?? '';
+  const { stretches = [], vertices = [] } = wiring[piece] ?? {};
+  const wire = stretches[stretch]?.wire ?? '';
+  const [near] = vertices.flatMap(({ pins }) => pins);
   // One wire may be part of several branches.
-  return { id: `current/${wire}.${stretch}`, of: wire, name: `${wire}.current` };
+  const id = `current/${wire}.${stretch}`;
+  return { id, of: wire, name: near === undefined ? wire : `${near.part.key}.${near.pin} wire current` };
 };
