@@ -36,7 +36,7 @@ export const prepareScene = (scene: Scene, dragged: Dragged = new Map()): Prepar
   const room = stillRoom(scene, wiring);
   const labels = placeLabels(scene, room);
   const still = [
-    ...wireShapes(scene),
+    ...wireShapes(wiring),
     ...scene.parts.flatMap((part) => symbolShapes(part.id, part.art, part.origin, part.stance, part.wired)),
     ...junctionShapes(wiring),
     ...labelShapes(labels),

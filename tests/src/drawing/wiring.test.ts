@@ -3,6 +3,7 @@ import { branchesOf } from '../../../src/drawing/branches.ts';
 import { lineCurrents } from '../../../src/drawing/lineCurrents.ts';
 import { sceneOf } from '../../../src/drawing/scene.ts';
 import { junctionsOf, wiringOf } from '../../../src/drawing/wireGraph.ts';
+import { wireShapes } from '../../../src/drawing/wires.ts';
 import type { DrawnEnd, DrawnWire } from '../../../src/stage/routing/document.ts';
 
 type Point = readonly [number, number];
@@ -182,5 +183,42 @@ describe('branches', () => {
     );
     expect(new Set(runs).size).toBe(runs.length);
     expect(runs).toHaveLength(wiring.reduce((sum, { stretches }) => sum + stretches.length, 0));
+  });
+});
+
+describe('the strokes of wires', () => {
+  it('lie on no other: a line shared by two wires is drawn once', () => {
+    const parting = scene({ r1: [0, 10], r2: [10, 20], r3: [-10, 20] }, {}, [
+      [
+        ['r1', 'b'],
+        ['r2', 'a'],
+        [0, 13],
+        [0, 15],
+        [10, 15],
+        [10, 17],
+      ],
+      [
+        ['r1', 'b'],
+        ['r3', 'a'],
+        [0, 13],
+        [0, 15],
+        [-10, 15],
+        [-10, 17],
+      ],
+    ]);
+    const paths = wireShapes(wiringOf(parting)).map((one) => (one.kind === 'path' ? one.commands : []));
+    expect(paths).toEqual([
+      [
+        ['M', 0, 156],
+        ['L', 0, 180],
+        ['L', 120, 180],
+        ['L', 120, 204],
+      ],
+      [
+        ['M', 0, 180],
+        ['L', -120, 180],
+        ['L', -120, 204],
+      ],
+    ]);
   });
 });
