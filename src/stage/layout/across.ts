@@ -1,12 +1,13 @@
 /** Where each cell's axis stands from left to right, given the order. */
 import type { GridBox } from '../routing/grid.ts';
 import type { Cell } from './cells.ts';
-import { Constraints } from './constraints.ts';
 import type { Flow } from './order.ts';
 import { spacing } from './spacing.ts';
 
 /** From a cell's axis to that of one to its right where neither stands in the other's way. */
 const leastStep = 3;
+
+const sweeps = 4;
 
 /**
  * Axes by cell. Cells at the same heights keep their distance in the order given; a signal goes right in any case;
@@ -18,40 +19,54 @@ export const axesOf = (
   room: ReadonlyMap<Cell, readonly GridBox[]>,
   stretch: number,
 ): ReadonlyMap<Cell, number> => {
-  const system = new Constraints();
-  const axes = new Map<Cell, number>(order.map((cell) => [cell, system.add()]));
-  const axisOf = (cell: Cell): number => axes.get(cell) ?? 0;
+  const arcs: Arc[] = [];
   for (const [index, left] of order.entries()) {
     for (const right of order.slice(index + 1)) {
       const apart = distance(room.get(left) ?? [], room.get(right) ?? [], spacing.beside + stretch);
       const flows = flow.after.get(left)?.has(right) === true;
       const wired = left.form === 'lying' || right.form === 'lying' ? spacing.half + leastStep : leastStep;
       const least = Math.max(apart, flows ? wired : -Infinity);
-      if (least > -Infinity) system.require(axisOf(left), axisOf(right), Math.ceil(least));
+      if (least > -Infinity) arcs.push({ left, right, least: Math.ceil(least) });
     }
   }
-
-  const limit = system.extent();
-  const settled = new Map<Cell, number>();
-  const bySlack = (): readonly Cell[] => {
-    const highs = system.highs(limit);
-    const slack = (cell: Cell): number => (highs[axisOf(cell)] ?? 0) - system.low(axisOf(cell));
-    return [...order].sort((a, b) => slack(a) - slack(b));
-  };
-  for (const cell of bySlack()) {
-    const axis = axisOf(cell);
-    const low = system.low(axis);
-    const high = Math.max(low, system.highs(limit)[axis] ?? low);
-    const near = order
-      .filter((other) => settled.has(other) && sharesNet(cell, other))
-      .map((other) => settled.get(other) ?? 0);
-    const wish = near.length === 0 ? low : near.reduce((sum, x) => sum + x, 0) / near.length;
-    const value = Math.min(Math.max(Math.round(wish), low), high);
-    system.fix(axis, value);
-    settled.set(cell, value);
+  const before = new Map<Cell, Arc[]>(order.map((cell) => [cell, []]));
+  const beyond = new Map<Cell, Arc[]>(order.map((cell) => [cell, []]));
+  for (const arc of arcs) {
+    before.get(arc.right)?.push(arc);
+    beyond.get(arc.left)?.push(arc);
   }
-  return settled;
+
+  // As far left as they go, in order; then each toward the middle of its neighbours, there and back.
+  const axes = new Map<Cell, number>();
+  const low = (cell: Cell): number =>
+    Math.max(0, ...(before.get(cell) ?? []).map(({ left, least }) => (axes.get(left) ?? 0) + least));
+  const high = (cell: Cell): number =>
+    Math.min(...(beyond.get(cell) ?? []).map(({ right, least }) => (axes.get(right) ?? 0) - least));
+  for (const cell of order) axes.set(cell, low(cell));
+  const neighbours = new Map(
+    order.map((cell) => [
+      cell,
+      flow.between.get(cell) ?? order.filter((other) => other !== cell && sharesNet(cell, other)),
+    ]),
+  );
+  const settle = (cell: Cell): void => {
+    const near = neighbours.get(cell) ?? [];
+    if (near.length === 0) return;
+    const wish = near.reduce((sum, other) => sum + (axes.get(other) ?? 0), 0) / near.length;
+    axes.set(cell, Math.max(low(cell), Math.min(high(cell), Math.round(wish))));
+  };
+  for (let sweep = 0; sweep < sweeps; sweep++) {
+    for (const cell of order.toReversed()) settle(cell);
+    for (const cell of order) settle(cell);
+  }
+  return axes;
 };
+
+interface Arc {
+  readonly left: Cell;
+  readonly right: Cell;
+  readonly least: number;
+}
 
 /** Least distance of two axes so that no boxes come nearer than `gap`; −∞ where they are at different heights. */
 const distance = (left: readonly GridBox[], right: readonly GridBox[], gap: number): number => {

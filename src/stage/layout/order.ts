@@ -13,6 +13,8 @@ export interface Flow {
   readonly outputs: ReadonlySet<Unit>;
   /** Transistors whose gate faces right. */
   readonly facing: ReadonlySet<Unit>;
+  /** What stands under the tail of a pair, and the two columns between which it belongs. */
+  readonly between: ReadonlyMap<Cell, readonly [Cell, Cell]>;
 }
 
 export const flowOf = (cells: readonly Cell[], twins: readonly Twins[], signals: ReadonlySet<Unit>): Flow => {
@@ -28,6 +30,7 @@ export const flowOf = (cells: readonly Cell[], twins: readonly Twins[], signals:
   };
   const cellOf = new Map(cells.flatMap((cell) => cell.units.map((unit) => [unit, cell] as const)));
 
+  const between = new Map<Cell, readonly [Cell, Cell]>();
   for (const { first, second, form, tail } of twins) {
     const [a, b] = [cellOf.get(first), cellOf.get(second)];
     if (a === undefined || b === undefined) continue;
@@ -37,6 +40,7 @@ export const flowOf = (cells: readonly Cell[], twins: readonly Twins[], signals:
       if (cell === a || cell === b || cell.form !== 'column') continue;
       put(a, cell);
       put(cell, b);
+      if (!between.has(cell)) between.set(cell, [a, b]);
     }
   }
   const leftPin = new Map<Unit, 0 | 1>();
@@ -68,7 +72,7 @@ export const flowOf = (cells: readonly Cell[], twins: readonly Twins[], signals:
       }
     }
   }
-  return { after, leftPin, outputs, facing };
+  return { after, leftPin, outputs, facing, between };
 };
 
 const noNet: Net = { index: -1, members: [], joints: [], power: null };

@@ -13,7 +13,12 @@ export interface Rows {
 /** A part is lined up with one that stands already when that moves it no farther than this. */
 const lineUp = 8;
 
-export const rowsOf = (cells: readonly Cell[], twins: readonly Twins[]): Rows => {
+/** `lowered` gives transistors that are to hang so much lower than they need. */
+export const rowsOf = (
+  cells: readonly Cell[],
+  twins: readonly Twins[],
+  lowered: ReadonlyMap<Unit, number> = new Map(),
+): Rows => {
   const system = new Constraints();
   const levels = new Map<Net, number>();
   const middles = new Map<Unit, number>();
@@ -25,8 +30,9 @@ export const rowsOf = (cells: readonly Cell[], twins: readonly Twins[]): Rows =>
     for (const { unit, upper, lower } of column) {
       const middle = middleOf(unit);
       if (upper !== undefined) {
-        const gap = upper.power === null ? spacing.abovePin : spacing.power;
-        system.require(levelOf(upper), middle, spacing.half + gap);
+        const above = unit.role === 'stack' ? spacing.aboveStack : spacing.abovePin;
+        const gap = upper.power === null ? above : spacing.power;
+        system.require(levelOf(upper), middle, spacing.half + gap + (lowered.get(unit) ?? 0));
       }
       if (lower !== undefined) {
         const gap = lower.power === null ? spacing.belowPin : spacing.power;

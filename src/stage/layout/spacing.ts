@@ -6,6 +6,8 @@ export const spacing = {
   belowPin: 3,
   /** From the level of a net down to the next pin. */
   abovePin: 2,
+  /** The same above a transistor, whose badge stands high beside it. */
+  aboveStack: 3,
   /** Pins of an upright part lie this far above and below its middle. */
   half: 3,
   /** Right of the axis of an upright part, for its name and value. */

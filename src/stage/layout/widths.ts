@@ -44,6 +44,7 @@ export const roomOf = (
 export const letteringWidth = (unit: Unit): number => {
   const kind = kindNamed(unit.kind);
   const context = { name: unit.part.name ?? unit.id, values: unit.part.values ?? {}, wired: unit.wired };
+  // What a device is called is not written at the part.
   const lines = kind === undefined || unit.part.device !== undefined ? [] : kind.text(context);
   const longest = Math.max(unit.part.name?.length ?? 0, ...lines.map((line) => line.length));
   return 1.25 + Math.max(longest * letter, spacing.lettering - 1.25);

@@ -9,6 +9,8 @@ import type { GridPoint } from './grid.ts';
 export interface DrawnPart {
   readonly kind: string;
   readonly name?: string | undefined;
+  /** Of a rail: what is written at it in place of its name. */
+  readonly label?: string | undefined;
   readonly place?: GridPoint | undefined;
   readonly turn?: Turn | undefined;
   readonly mirror?: boolean | undefined;

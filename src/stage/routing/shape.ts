@@ -1,10 +1,10 @@
 import type { SymbolArt } from '../../../symbols/art.ts';
 import { standing, standingBox } from '../../../symbols/placement.ts';
+import { tagArt } from '../../../symbols/tag.ts';
 import type { PartContext } from '../../parts/kind.ts';
 import { kindNamed } from '../../parts/catalogue.ts';
 import type { DrawnPart, DrawnStage } from './document.ts';
 import { headings, unit, type GridBox, type GridPoint, type Heading } from './grid.ts';
-import { standInArt } from './standIn.ts';
 
 /** A pin where it comes to lie on the sheet. */
 export interface StandingPin {
@@ -23,6 +23,9 @@ export interface StandingPart {
   /** The symbol's body, leads left out. */
   readonly body: GridBox;
 }
+
+/** Widest letter of a name at 13 px, nearly. */
+const letterWidth = 8;
 
 const noPins: ReadonlySet<string> = new Set();
 
@@ -50,11 +53,16 @@ export const artOf = (
   const device = part.device === undefined ? undefined : document.devices[part.device];
   const context: PartContext = {
     name: part.name ?? id,
+    ...(part.label === undefined ? {} : { label: part.label }),
     values: part.values ?? {},
     ...(device === undefined ? {} : { device }),
     wired,
   };
-  return kindNamed(part.kind)?.symbol(context) ?? standInArt(part.kind, context);
+  const kind = kindNamed(part.kind);
+  if (kind?.joins !== 'label') return kind?.symbol(context);
+  // A tag is as long as its label. Here a letter's width at most will do: this is room, not ink.
+  const label = kind.text(context)[0] ?? '';
+  return tagArt(label.length * letterWidth, part.turn === 90 || part.turn === 270);
 };
 
 /** The heading from the nearest side of a body to a pin outside it, or away from the body's middle for one at its edge. */
