@@ -71,6 +71,7 @@ export const readState = ({ compiled, duties, snags, bench }: Stand): SettledSta
   const pinCurrents: Record<string, Figure> = {};
   const parts: Record<string, PartReading> = {};
   const speaking = speakers(compiled.parts);
+  const loose = new Set(compiled.loose);
   for (const part of compiled.parts) {
     if (!speaking.has(part.id)) continue;
     for (const pin of part.pins) {
@@ -78,6 +79,8 @@ export const readState = ({ compiled, duties, snags, bench }: Stand): SettledSta
       const volts = node === null ? undefined : settlement.voltages[node];
       pins[`${part.name}.${pin}`] = volts === undefined || point.unsetNode(node) ? null : plain(volts);
     }
+    // Nothing electrical reaches a part that is left out: it has no figures, and its snag says why.
+    if (loose.has(part.id)) continue;
     const readout = readoutOf(compiled, part, point);
     for (const pin of part.pins) {
       const current = readout.pinCurrents[pin];
