@@ -43,7 +43,7 @@ export const axesOf = (
   const high = (cell: Cell): number =>
     Math.min(...(beyond.get(cell) ?? []).map(({ right, least }) => (axes.get(right) ?? 0) - least));
   for (const cell of order) axes.set(cell, low(cell));
-  const neighbours = new Map(
+  const neighbours = new Map<Cell, readonly Cell[]>(
     order.map((cell) => [
       cell,
       flow.between.get(cell) ?? order.filter((other) => other !== cell && sharesNet(cell, other)),
