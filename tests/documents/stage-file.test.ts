@@ -11,7 +11,7 @@ import type { PartContext } from '../../src/parts/kind.ts';
 import { settleStage } from '../../src/readings/settleStage.ts';
 import { readStage } from '../../src/stage/readStage.ts';
 
-const page = readFileSync(new URL('../../docs/stage-file.md', import.meta.url), 'utf8');
+const page = readFileSync(new URL('../../src/stage/stage-file.md', import.meta.url), 'utf8');
 const example = /```json\n(.*?)```/s.exec(page)?.[1] ?? '';
 
 /** Rows of the table whose head is `kind`, each with its cells. */
@@ -36,7 +36,7 @@ const asFirstLaidDown = (kind: (typeof catalogue)[number]): PartContext => {
   return { name: 'X1', values, wired: new Set(wired), ...(device === undefined ? {} : { device }) };
 };
 
-describe('docs/stage-file.md', () => {
+describe('src/stage/stage-file.md', () => {
   it('has an example that opens and settles in both of its states', async () => {
     const read = await readStage(example);
     if (!read.ok)

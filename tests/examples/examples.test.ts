@@ -296,3 +296,19 @@ describe('flood-alarm relay', async () => {
     expect(example.mosfet('quiet', 'Q1').region).toBe('cutoff');
   });
 });
+
+describe('debris-screen heater', () => {
+  it('drops between what its facts state at 10 V and at 4.5 V on the gate, and is covered by a fact', async () => {
+    // Entered by facts: 15 mΩ typical at 10 V, 20 mΩ at 4.5 V, both at 25 °C. At 4.995 V the resistance lies between,
+    // and in the cold of the stage (0 °C) below the warm figure: R ∝ 1/β ∝ T^1.5 against a threshold 0.1 V higher.
+    const example = await settledExample('screen-heater');
+    const q1 = example.mosfet('heating', 'Q1');
+    const resistance = (q1.drainToSource ?? Number.NaN) / (q1.drainCurrent ?? Number.NaN);
+    expect(resistance).toBeGreaterThan(0.013);
+    expect(resistance).toBeLessThan(0.02);
+    expectNear(q1.drainCurrent ?? Number.NaN, 12 / (8 + resistance), 1e-6);
+    expect(q1.verdict).toBe('held');
+    expect(q1.reasons).toEqual(['nominal only']);
+    expect(example.mosfet('thawed', 'Q1').verdict).toBe('held');
+  });
+});

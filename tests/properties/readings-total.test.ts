@@ -51,8 +51,10 @@ describe('any sound stage file', () => {
         const read = readStageAtOnce(JSON.stringify(file));
         if (!read.ok) return;
         const placed = layOut(read.value);
-        const [[state = '', readings] = []] = Object.entries(settleStage(read.value).states);
-        const drawing = drawPlate(placed, readings ?? null, {
+        const [first] = Object.entries(settleStage(read.value).states);
+        if (first === undefined) throw new Error('no state');
+        const [state, readings] = first;
+        const drawing = drawPlate(placed, readings, {
           routes: routeWires(placed),
           state,
           density: 'all',
