@@ -1,9 +1,9 @@
 /** Lays out one group of parts that hang together by wires. */
 import { boxAround, type GridBox, type GridPoint, type Polyline } from '../routing/grid.ts';
 import type { DrawnStage } from '../routing/document.ts';
-import { linesOf } from '../routing/lines.ts';
 import { lengthOf } from '../routing/grid.ts';
-import { routeStage } from '../routing/routeWires.ts';
+import { routeIn } from '../routing/routeWires.ts';
+import { Session } from '../routing/session.ts';
 import { reachOf, type StandingPart } from '../routing/shape.ts';
 import { axesOf } from './across.ts';
 import { cellsOf, isSignalRail, type Cell } from './cells.ts';
@@ -12,7 +12,7 @@ import { standingOf } from './columns.ts';
 import { firstOrder, flowOf, type Flow } from './order.ts';
 import { twinsOf } from './pairs.ts';
 import { attach, cellPlaces, hostsOf, jointPlaces, standUnit, type Place } from './places.ts';
-import { rowsOf } from './rows.ts';
+import { rowsOf, type Rows } from './rows.ts';
 import { roomOf } from './widths.ts';
 
 export interface Arrangement {
@@ -22,9 +22,9 @@ export interface Arrangement {
   readonly bounds: GridBox;
 }
 
-/** How many arrangements are tried at most, and how many parts' worth of trying there is for large groups. */
+/** How many arrangements are tried at most, and how much work on routes goes into it (states and grid points). */
 const mostTrials = 160;
-const trialsForParts = 3200;
+const mostEffort = 800_000;
 
 /** By how much a transistor is hung lower at a time. */
 const lowering = 3;
@@ -52,8 +52,10 @@ export const arrange = (
     (unit) => unit.role === 'probe' || (symbols.includes(unit) && !hosted.has(unit)),
   );
 
+  const rowsFor = new Map<Choice['lowered'], Rows>();
   const build = ({ order, facing, lowered, stretch }: Choice): Arrangement => {
-    const rows = rowsOf(cells, twins, lowered);
+    const rows = rowsFor.get(lowered) ?? rowsOf(cells, twins, flow.leftPin, lowered);
+    rowsFor.set(lowered, rows);
     const turned: Flow = { ...flow, facing };
     const room = new Map(order.map((cell) => [cell, roomOf(cell, rows, turned, hosted)]));
     const axes = axesOf(order, turned, room, stretch);
@@ -69,17 +71,19 @@ export const arrange = (
     }
     return { places, joints, bounds: boxAround(boxes) ?? { left: 0, right: 0, top: 0, bottom: 0 } };
   };
+  let effort = 0;
   const judge = ({ order }: Choice, arrangement: Arrangement): number => {
     const placed = withPlaces(own, arrangement);
     const parts = new Map<string, StandingPart>(
       [...arrangement.places].map(([unit, place]) => [unit.id, standUnit(unit, place)]),
     );
-    const { paths, blocked } = routeStage(placed, parts);
-    const { crossings } = linesOf(placed, paths, parts);
+    const session = new Session(placed, parts);
+    const { paths, blocked } = routeIn(session, placed);
+    effort += session.effort + session.field.solid.length;
     const { bounds } = arrangement;
     return (
       blocked.size * weights.blocked +
-      crossings.length * weights.crossing +
+      session.crossings() * weights.crossing +
       bendsIn(paths) * weights.bend +
       against(order, flow) * weights.against +
       [...paths.values()].reduce((sum, line) => sum + lengthOf(line), 0) * weights.length +
@@ -92,7 +96,7 @@ export const arrange = (
     lowered: new Map(),
     stretch: 0,
   };
-  return better(first, Math.min(mostTrials, trialsForParts / group.length), build, judge);
+  return better(first, build, judge, (trials) => trials < mostTrials && effort < mostEffort);
 };
 
 /** What is left open once rows and flow are known, and decided by trying. */
@@ -114,41 +118,41 @@ interface Choice {
  */
 const better = (
   first: Choice,
-  trials: number,
   build: (choice: Choice) => Arrangement,
   judge: (choice: Choice, arrangement: Arrangement) => number,
+  goesOn: (trials: number) => boolean,
 ): Arrangement => {
   let choice = first;
   let best = build(choice);
   let price = judge(choice, best);
-  let left = trials;
+  let trials = 0;
   const attempt = (change: Partial<Choice>): boolean => {
-    if (left-- <= 0) return false;
     const next = { ...choice, ...change };
     const arrangement = build(next);
     const nextPrice = judge(next, arrangement);
+    trials++;
     if (nextPrice >= price - 1e-9) return false;
     [choice, best, price] = [next, arrangement, nextPrice];
     return true;
   };
+  const tryIf = (change: Partial<Choice>): boolean => goesOn(trials) && attempt(change);
   const stacks = first.order.flatMap(({ units }) => units.filter(({ role }) => role === 'stack'));
-  for (let gained = true; gained && left > 0;) {
+  for (let gained = true; gained && goesOn(trials);) {
     gained = false;
     for (const unit of stacks) {
       const facing = new Set(choice.facing);
       if (!facing.delete(unit)) facing.add(unit);
-      gained = attempt({ facing }) || gained;
+      gained = tryIf({ facing }) || gained;
     }
     for (const cell of first.order)
-      gained = moved(cell, choice.order).some((order) => attempt({ order })) || gained;
+      gained = moved(cell, choice.order).some((order) => tryIf({ order })) || gained;
     for (const unit of stacks) {
       const lower = (choice.lowered.get(unit) ?? 0) + lowering;
-      gained = attempt({ lowered: new Map([...choice.lowered, [unit, lower]]) }) || gained;
+      gained = tryIf({ lowered: new Map([...choice.lowered, [unit, lower]]) }) || gained;
     }
   }
   // More room is the last resort, for a wire that found no way.
   for (const stretch of [3, 6, 12]) {
-    left = 1;
     if (price >= weights.blocked) attempt({ stretch });
   }
   return best;

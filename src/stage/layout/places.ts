@@ -29,8 +29,7 @@ export const hostsOf = (cells: readonly Cell[], symbols: readonly Unit[]): Hoste
         unit.role === 'rail' ? column[0]?.upper === net : column.at(-1)?.lower === net,
       );
       const stacked = ends.filter(({ column }) => column.some((upright) => upright.unit.role === 'stack'));
-      const free = [...stacked, ...ends].filter((cell) => !used.has(`${unit.role} ${cell.rank}`));
-      const cell = free[0] ?? ends[0];
+      const cell = [...stacked, ...ends].find(({ rank }) => !used.has(`${unit.role} ${rank}`));
       if (cell === undefined) continue;
       used.add(`${unit.role} ${cell.rank}`);
       hosted.set(unit, { cell, net });

@@ -1,6 +1,6 @@
 /** How high everything stands: the level of each net and the middle of each part, by least distances and wishes. */
 import type { Cell } from './cells.ts';
-import { listeners, pinPointing, type Net, type Unit } from './circuit.ts';
+import { isListener, listeners, pinPointing, type Net, type Unit } from './circuit.ts';
 import { Constraints } from './constraints.ts';
 import type { Twins } from './pairs.ts';
 import { spacing } from './spacing.ts';
@@ -17,6 +17,7 @@ const lineUp = 8;
 export const rowsOf = (
   cells: readonly Cell[],
   twins: readonly Twins[],
+  leftPin: ReadonlyMap<Unit, 0 | 1>,
   lowered: ReadonlyMap<Unit, number> = new Map(),
 ): Rows => {
   const system = new Constraints();
@@ -26,6 +27,15 @@ export const rowsOf = (
   const middleOf = (unit: Unit): number => entered(middles, unit, system);
 
   // ---- what must be ----
+  for (const { units, column } of cells) {
+    for (const unit of units) system.require(0, middleOf(unit), spacing.half);
+    // Said apart from the nets between them, which say nothing for a part with both pins on one net.
+    for (const [index, { unit }] of column.entries()) {
+      const next = column[index + 1];
+      if (next !== undefined)
+        system.require(middleOf(unit), middleOf(next.unit), 2 * spacing.half + spacing.power);
+    }
+  }
   for (const { column } of cells) {
     for (const { unit, upper, lower } of column) {
       const middle = middleOf(unit);
@@ -40,8 +50,6 @@ export const rowsOf = (
       }
     }
   }
-  // Without a net that joins two parts of a column above and below, nothing above would keep a lone part off the top.
-  for (const { units } of cells) for (const unit of units) system.require(0, middleOf(unit), spacing.half);
 
   // ---- what should be ----
   for (const { first, second } of twins) system.equal(middleOf(first), middleOf(second));
@@ -54,7 +62,23 @@ export const rowsOf = (
       if (tap?.power === null) system.equal(levelOf(tap), middleOf(unit));
     }
   }
-  for (const { form, units, lying } of cells) {
+  const couplings = cells.flatMap(({ lying }) => {
+    if (lying === undefined) return [];
+    const [a, b] = lying.nets;
+    const [from, to] = leftPin.get(lying.unit) === 1 ? [b, a] : [a, b];
+    return [{ unit: lying.unit, from, to, driver: stackOn(from, false), listener: stackOn(to, true) }];
+  });
+  // Stages that a part couples stand side by side, not as stairs.
+  for (const { driver, listener } of couplings) {
+    if (driver !== undefined && listener !== undefined) system.equal(middleOf(driver), middleOf(listener));
+  }
+  for (const { unit, from, to, driver } of couplings) {
+    // Level with the net that drives it; what it drives comes to it.
+    for (const net of driver === undefined ? [to, from] : [from, to]) {
+      if (net?.power === null) system.equal(middleOf(unit), levelOf(net));
+    }
+  }
+  for (const { form, units } of cells) {
     for (const unit of units) {
       if (form === 'block') {
         for (const [pin, net] of unit.nets) {
@@ -67,25 +91,19 @@ export const rowsOf = (
       }
       if (form === 'symbol') for (const net of unit.nets.values()) system.equal(middleOf(unit), levelOf(net));
     }
-    for (const net of lying?.nets ?? []) {
-      if (lying !== undefined && net?.power === null) system.equal(middleOf(lying.unit), levelOf(net));
-    }
   }
 
   // ---- what stays open, the tightest first ----
-  const limit = system.extent();
+  system.limit(system.extent());
   const rowsUsed: number[] = [];
   const settle = (index: number, wish: (low: number, high: number) => number): number => {
     const low = system.low(index);
-    const high = Math.max(low, system.highs(limit)[index] ?? low);
+    const high = Math.max(low, system.high(index));
     const value = Math.min(Math.max(wish(low, high), low), high);
     system.fix(index, value);
     return value;
   };
-  const slack = (unit: Unit): number => {
-    const index = middleOf(unit);
-    return (system.highs(limit)[index] ?? 0) - system.low(index);
-  };
+  const slack = (unit: Unit): number => system.high(middleOf(unit)) - system.low(middleOf(unit));
   const uprights = cells
     .flatMap(({ column }) => column)
     .map((upright) => ({ upright, slack: slack(upright.unit) }));
@@ -125,6 +143,12 @@ const entered = <Key>(map: Map<Key, number>, key: Key, system: Constraints): num
   map.set(key, index);
   return index;
 };
+
+/** The first transistor that listens to a net, or that carries it. */
+const stackOn = (net: Net | undefined, listening: boolean): Unit | undefined =>
+  net?.power === null
+    ? net.members.find((member) => member.unit.role === 'stack' && isListener(member) === listening)?.unit
+    : undefined;
 
 /** Whether a power net holds one part and its rail alone, so that the rail can come down to the part. */
 const isPrivate = (net: Net): boolean => net.members.filter(({ unit }) => unit.role !== 'rail').length <= 1;

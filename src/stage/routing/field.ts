@@ -6,6 +6,9 @@ import { reachOf, type StandingPart } from './shape.ts';
 /** Room left round everything, so that a wire can go round the outermost part. */
 const margin = 6;
 
+/** A line keeps this far from a body's outline at least, grid units: nearer, the two would read as one. */
+const clearance = 0.4;
+
 /** A pin that no wire ends on, or where pins of two nets lie on one another: nothing may pass. */
 const nobody = -1;
 
@@ -63,10 +66,10 @@ export class Field {
     const pins = [...part.pins.values()].filter((pin) => pin.drawn);
     const open = (side: 'left' | 'right' | 'top' | 'bottom'): boolean =>
       pins.some(({ at }) => at[side === 'left' || side === 'right' ? 0 : 1] === body[side]);
-    const firstX = open('left') ? Math.floor(body.left) + 1 : Math.ceil(body.left);
-    const lastX = open('right') ? Math.ceil(body.right) - 1 : Math.floor(body.right);
-    const firstY = open('top') ? Math.floor(body.top) + 1 : Math.ceil(body.top);
-    const lastY = open('bottom') ? Math.ceil(body.bottom) - 1 : Math.floor(body.bottom);
+    const firstX = open('left') ? Math.floor(body.left) + 1 : Math.ceil(body.left - clearance);
+    const lastX = open('right') ? Math.ceil(body.right) - 1 : Math.floor(body.right + clearance);
+    const firstY = open('top') ? Math.floor(body.top) + 1 : Math.ceil(body.top - clearance);
+    const lastY = open('bottom') ? Math.ceil(body.bottom) - 1 : Math.floor(body.bottom + clearance);
     for (let y = firstY; y <= lastY; y++) for (let x = firstX; x <= lastX; x++) this.setSolid(x, y);
     for (const { at } of pins) {
       const [x, y] = at;

@@ -15,8 +15,11 @@ const rounds = 2;
  * by the cheapest way that is left; then each is lifted and laid again in the light of all the others. A wire that
  * finds no way asks those in its way to move.
  */
-export const routeStage = (document: DrawnStage, parts?: ReadonlyMap<string, StandingPart>): Routing => {
-  const session = new Session(document, parts);
+export const routeStage = (document: DrawnStage, parts?: ReadonlyMap<string, StandingPart>): Routing =>
+  routeIn(new Session(document, parts), document);
+
+/** As `routeStage`, in a session of its own, for who wants to know more of it than the routes. */
+export const routeIn = (session: Session, document: DrawnStage): Routing => {
   const open: Task[] = [];
   for (const task of session.tasks.values()) {
     const path = document.wires[task.id]?.path;

@@ -1,6 +1,6 @@
 import { cost } from './costs.ts';
 import type { Field } from './field.ts';
-import { tidied, type GridPoint, type Heading, type Polyline } from './grid.ts';
+import { tidied, type GridBox, type GridPoint, type Heading, type Polyline } from './grid.ts';
 import { Heap } from './heap.ts';
 
 /** One end of a wire to be routed. */
@@ -15,8 +15,8 @@ export interface Search {
   readonly to: Terminal;
   /** Number of the wire's net. */
   readonly net: number;
-  /** Whether the net has lines on the field already, which cost less to follow. */
-  readonly hasLines: boolean;
+  /** A box that holds all lines that the net has on the field already, which cost less to follow; null for none. */
+  readonly lines: GridBox | null;
   /** How far beyond the box round both ends to look, grid units. */
   readonly beyond: number;
   /** Let other nets' lines be run over at a high price, to learn which of them stand in the way. */
@@ -29,7 +29,8 @@ export interface Search {
  * Shortest path on the grid (Lee, 'An Algorithm for Path Connections and Its Applications', IRE Trans. Electronic
  * Computers EC-10, 1961), led by a lower bound (Hart, Nilsson and Raphael, 'A Formal Basis for the Heuristic
  * Determination of Minimum Cost Paths', IEEE Trans. SSC-4, 1968), over states of point and heading so that bends
- * have a price. Work arrays are kept between searches.
+ * have a price. Where the net has lines at one end already, the search sets out from all of them at once, so that a
+ * long trunk is not searched again for each wire on it. Work arrays are kept between searches.
  */
 export class PathFinder {
   private readonly field: Field;
@@ -40,6 +41,24 @@ export class PathFinder {
   private readonly before: Int32Array;
   private readonly heap = new Heap();
   private round = 0;
+  /** States looked at so far, in all searches: the same on every machine, unlike time. */
+  effort = 0;
+
+  // ---- the search under way ----
+  private own = 0;
+  private goal = -1;
+  private goalX = 0;
+  private goalY = 0;
+  private headingIn: Heading | null = null;
+  private trespassing = false;
+  /** Columns and rows of the field to look at. */
+  private lowX = 0;
+  private highX = 0;
+  private lowY = 0;
+  private highY = 0;
+  /** The box of the net's lines where they may be met on the way, else null. Columns and rows. */
+  private met: GridBox | null = null;
+  private goalToMet = 0;
 
   constructor(field: Field) {
     this.field = field;
@@ -52,123 +71,118 @@ export class PathFinder {
   /** The route with both ends; null where there is none within reach. */
   find(search: Search): Polyline | null {
     const { field } = this;
-    const { from, to, beyond } = search;
-    const start = field.at(from.at[0], from.at[1]);
-    const goal = field.at(to.at[0], to.at[1]);
+    const start = field.at(search.from.at[0], search.from.at[1]);
+    const goal = field.at(search.to.at[0], search.to.at[1]);
     if (start < 0 || goal < 0) return null;
-    if (start === goal) return [from.at, to.at];
+    if (start === goal) return [search.from.at, search.to.at];
+    this.own = search.net + 1;
+    const hasLines = search.lines !== null;
+    if (hasLines && !this.isOnOwnLine(start) && this.isOnOwnLine(goal)) {
+      const back = this.search({ ...search, from: search.to, to: search.from }, goal, start, true);
+      return back === null ? null : [...back].reverse();
+    }
+    return this.search(search, start, goal, hasLines && this.isOnOwnLine(start));
+  }
 
-    // ---- the part of the field to look at, and the bound ----
-    const { width, height } = field;
-    const fromX = from.at[0] - field.left;
-    const fromY = from.at[1] - field.top;
-    const goalX = to.at[0] - field.left;
-    const goalY = to.at[1] - field.top;
-    const lowX = Math.max(0, Math.min(fromX, goalX) - beyond);
-    const highX = Math.min(width - 1, Math.max(fromX, goalX) + beyond);
-    const lowY = Math.max(0, Math.min(fromY, goalY) - beyond);
-    const highY = Math.min(height - 1, Math.max(fromY, goalY) + beyond);
-    const least = search.hasLines ? cost.shared : cost.step;
-    const bound = (x: number, y: number): number => {
-      const distanceX = Math.abs(goalX - x);
-      const distanceY = Math.abs(goalY - y);
-      return (distanceX + distanceY) * least + (distanceX > 0 && distanceY > 0 ? cost.bend : 0);
-    };
-
-    // ---- the search ----
-    const { reached, seen, before, heap } = this;
-    const round = ++this.round;
-    heap.clear();
-    const enter = (state: number, previous: number, spent: number, x: number, y: number): void => {
-      if (seen[state] === round && (reached[state] ?? 0) <= spent) return;
-      seen[state] = round;
-      reached[state] = spent;
-      before[state] = previous;
-      heap.push(spent + bound(x, y), state, spent);
-    };
-
+  private search(search: Search, start: number, goal: number, fromLines: boolean): Polyline | null {
+    const { reached, before, heap } = this;
+    this.prepare(search, goal, fromLines);
+    const { heading: lead } = search.from;
+    const along: number[] = [];
     for (let heading = 0; heading < 4; heading++) {
-      const aside = from.heading !== null && from.heading !== heading;
-      this.advance(
-        search,
-        start,
-        -1,
-        heading,
-        aside ? cost.sideways : 0,
-        goal,
-        lowX,
-        highX,
-        lowY,
-        highY,
-        enter,
-      );
+      const aside = lead !== null && lead !== heading ? cost.sideways : 0;
+      const entered = this.advance(start, -1, heading, aside, false);
+      if (entered >= 0 && fromLines) along.push(entered);
+    }
+    // Along the net's own lines first, as far as they go.
+    for (const state of along) {
+      for (let turn = 0; turn < 3; turn++) {
+        const entered = this.turnFrom(state, reached[state] ?? 0, turn, true);
+        if (entered >= 0) along.push(entered);
+      }
     }
     while (heap.size > 0) {
       const state = heap.pop();
       const spent = heap.poppedTag;
+      this.effort++;
       if (spent !== reached[state]) continue;
-      const point = state >> 2;
-      const heading = state & 3;
-      if (point === goal) return this.traced(state, from.at);
-      // On another net's line there is no turning: that would look like a connection.
-      const straightOnly = !search.trespassing && this.isCrossed(point, search.net + 1);
-      for (let turn = 0; turn < 3; turn++) {
-        if (turn > 0 && straightOnly) break;
-        const next = turn === 0 ? heading : turn === 1 ? (heading + 1) & 3 : (heading + 3) & 3;
-        const spentHere = spent + (turn === 0 ? 0 : cost.bend);
-        this.advance(search, point, state, next, spentHere, goal, lowX, highX, lowY, highY, enter);
-      }
+      if (state >> 2 === goal) return this.traced(state, before, search.from.at);
+      for (let turn = 0; turn < 3; turn++) this.turnFrom(state, spent, turn, false);
     }
     return null;
   }
 
-  /** One step from a point along a heading, entered where it is allowed. */
-  private advance(
-    search: Search,
-    point: number,
-    state: number,
-    heading: number,
-    spent: number,
+  private prepare(
+    { from, to, net, lines, beyond, trespassing }: Search,
     goal: number,
-    lowX: number,
-    highX: number,
-    lowY: number,
-    highY: number,
-    enter: (state: number, previous: number, spent: number, x: number, y: number) => void,
+    fromLines: boolean,
   ): void {
-    const { field } = this;
+    const { left, top, width, height } = this.field;
+    this.own = net + 1;
+    this.goal = goal;
+    this.goalX = to.at[0] - left;
+    this.goalY = to.at[1] - top;
+    this.headingIn = to.heading;
+    this.trespassing = trespassing ?? false;
+    const [fromX, fromY] = [from.at[0] - left, from.at[1] - top];
+    this.lowX = Math.max(0, Math.min(fromX, this.goalX) - beyond);
+    this.highX = Math.min(width - 1, Math.max(fromX, this.goalX) + beyond);
+    this.lowY = Math.max(0, Math.min(fromY, this.goalY) - beyond);
+    this.highY = Math.min(height - 1, Math.max(fromY, this.goalY) + beyond);
+    this.met =
+      lines === null || fromLines
+        ? null
+        : {
+            left: lines.left - left,
+            right: lines.right - left,
+            top: lines.top - top,
+            bottom: lines.bottom - top,
+          };
+    this.goalToMet = this.toMet(this.goalX, this.goalY);
+    this.round++;
+    this.heap.clear();
+  }
+
+  /** Steps on from a state: straight (0), or after a turn to the right (1) or left (2). The state entered, or −1. */
+  private turnFrom(state: number, spent: number, turn: number, ownOnly: boolean): number {
+    const heading = turn === 0 ? state & 3 : ((state & 3) + (turn === 1 ? 1 : 3)) & 3;
+    return this.advance(state >> 2, state, heading, spent + (turn === 0 ? 0 : cost.bend), ownOnly);
+  }
+
+  /** One step from a point along a heading: the state entered, −1 where that is not allowed or known to be dearer. */
+  private advance(point: number, state: number, heading: number, spent: number, ownOnly: boolean): number {
+    const { field, own } = this;
     const { width, across, down } = field;
     const x = (point % width) + (heading === 0 ? 1 : heading === 2 ? -1 : 0);
     const y = Math.floor(point / width) + (heading === 1 ? 1 : heading === 3 ? -1 : 0);
-    if (x < lowX || x > highX || y < lowY || y > highY) return;
+    if (x < this.lowX || x > this.highX || y < this.lowY || y > this.highY) return -1;
     const next = y * width + x;
-    const own = search.net + 1;
     const level = heading === 0 || heading === 2;
     const lines = level ? across : down;
-    const sideStep = level ? width : 1;
     const edge = heading === 0 || heading === 1 ? point : next;
     let price = spent;
 
     // ---- the line to the next point ----
     const there = lines[edge] ?? 0;
     if (there === own) price += cost.shared;
+    else if (ownOnly) return -1;
     else if (there === 0) price += cost.step;
-    else if (search.trespassing) price += cost.trespass;
-    else return;
+    else if (this.trespassing) price += cost.trespass;
+    else return -1;
+    const sideStep = level ? width : 1;
     const besideA = lines[edge - sideStep] ?? 0;
     const besideB = lines[edge + sideStep] ?? 0;
     if ((besideA !== 0 && besideA !== own) || (besideB !== 0 && besideB !== own)) price += cost.crowded;
 
     // ---- the next point ----
-    if (next === goal) {
-      const headingIn = search.to.heading;
+    if (next === this.goal) {
       // Arriving in line with the lead is arriving against its heading.
-      if (headingIn !== null && headingIn !== (heading ^ 2)) price += cost.sideways;
+      if (this.headingIn !== null && this.headingIn !== (heading ^ 2)) price += cost.sideways;
     } else {
-      if (field.solid[next] === 1) return;
+      if (field.solid[next] === 1) return -1;
       const pin = field.pin[next] ?? 0;
       if (pin !== 0) {
-        if (pin !== own) return;
+        if (pin !== own) return -1;
         price += cost.overPin;
       }
       const crossings = level ? down : across;
@@ -177,33 +191,54 @@ export class PathFinder {
       const foreignA = crossA !== 0 && crossA !== own;
       const foreignB = crossB !== 0 && crossB !== own;
       if (foreignA || foreignB) {
+        // Straight over a straight line, whose own run on either side then leaves no room to turn upon it.
         if (crossA === crossB) price += cost.crossing;
-        else if (search.trespassing) price += cost.trespass;
-        else return;
+        else if (this.trespassing) price += cost.trespass;
+        else return -1;
       }
       price += field.toll[next] ?? 0;
     }
-    enter(next * 4 + heading, state, price, x, y);
+
+    const entered = next * 4 + heading;
+    const { reached, seen, round } = this;
+    if (seen[entered] === round && (reached[entered] ?? 0) <= price) return -1;
+    seen[entered] = round;
+    reached[entered] = price;
+    this.before[entered] = state;
+    this.heap.push(price + this.bound(x, y), entered, price);
+    return entered;
   }
 
-  /** Whether a line of another net touches a point. */
-  private isCrossed(point: number, own: number): boolean {
+  /** What the rest of the way costs at least. */
+  private bound(x: number, y: number): number {
+    const distanceX = Math.abs(this.goalX - x);
+    const distanceY = Math.abs(this.goalY - y);
+    const distance = distanceX + distanceY;
+    const bend = distanceX > 0 && distanceY > 0 ? cost.bend : 0;
+    if (this.met === null) return distance * cost.step + bend;
+    // Either all of it is new line, or at least what lies outside the box of the net's own lines is.
+    const outside = this.toMet(x, y) + this.goalToMet;
+    const inside = Math.max(0, distance - outside);
+    return Math.min(distance * cost.step, outside * cost.step + inside * cost.shared) + bend;
+  }
+
+  private toMet(x: number, y: number): number {
+    const { met } = this;
+    if (met === null) return 0;
+    return Math.max(met.left - x, 0, x - met.right) + Math.max(met.top - y, 0, y - met.bottom);
+  }
+
+  private isOnOwnLine(point: number): boolean {
     const { across, down, width } = this.field;
-    const right = across[point] ?? 0;
-    const left = across[point - 1] ?? 0;
-    const below = down[point] ?? 0;
-    const above = down[point - width] ?? 0;
+    const { own } = this;
     return (
-      (right !== 0 && right !== own) ||
-      (left !== 0 && left !== own) ||
-      (below !== 0 && below !== own) ||
-      (above !== 0 && above !== own)
+      across[point] === own || across[point - 1] === own || down[point] === own || down[point - width] === own
     );
   }
 
-  private traced(last: number, from: GridPoint): Polyline {
+  private traced(last: number, before: Int32Array, from: GridPoint): Polyline {
     const points: GridPoint[] = [];
-    for (let state = last; state >= 0; state = this.before[state] ?? -1)
+    for (let state = last; state >= 0; state = before[state] ?? -1)
       points.push(this.field.pointAt(state >> 2));
     points.push(from);
     return tidied(points.reverse());

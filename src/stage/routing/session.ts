@@ -9,6 +9,8 @@ import { reachOf, standParts, type StandingPart } from './shape.ts';
 /** How far beyond its two ends a route is looked for at first, grid units; then on the whole field. */
 const nearby = 10;
 
+const dot = ([x, y]: GridPoint): GridBox => ({ left: x, right: x, top: y, bottom: y });
+
 /** One wire with both ends on the sheet. */
 export interface Task {
   readonly id: string;
@@ -25,6 +27,8 @@ export class Session {
   readonly tasks: ReadonlyMap<string, Task>;
   readonly paths = new Map<string, Polyline>();
   private readonly drawn: Set<string>[];
+  /** For each net a box that holds all its lines. Not made smaller when a line is lifted. */
+  private readonly boxes: GridBox[] = [];
   private readonly finder: PathFinder;
 
   constructor(document: DrawnStage, parts: ReadonlyMap<string, StandingPart> = standParts(document)) {
@@ -48,7 +52,6 @@ export class Session {
     this.tasks = tasks;
 
     const boxes: GridBox[] = [...parts.values()].map(reachOf);
-    const dot = ([x, y]: GridPoint): GridBox => ({ left: x, right: x, top: y, bottom: y });
     for (const at of Object.values(document.joints)) boxes.push(dot(at));
     for (const { path } of Object.values(document.wires)) for (const at of path ?? []) boxes.push(dot(at));
     this.field = new Field(boxAround(boxes) ?? dot([0, 0]));
@@ -61,6 +64,19 @@ export class Session {
     }
     this.drawn = Array.from({ length: this.nets.count }, () => new Set<string>());
     this.finder = new PathFinder(this.field);
+  }
+
+  /** How much searching has been done so far, in states looked at. */
+  get effort(): number {
+    return this.finder.effort;
+  }
+
+  /** How often lines of two nets cross. */
+  crossings(): number {
+    let met = 0;
+    for (const [id, line] of this.paths) met += this.conflicts(line, this.tasks.get(id)?.net ?? -1);
+    // Each crossing is met once from either side.
+    return met / 2;
   }
 
   /** Draws a wire's line if it may stand there. */
@@ -97,7 +113,7 @@ export class Session {
       from: task.from,
       to: task.to,
       net: task.net,
-      hasLines: (this.drawn[task.net]?.size ?? 0) > 0,
+      lines: (this.drawn[task.net]?.size ?? 0) > 0 ? (this.boxes[task.net] ?? null) : null,
       beyond: nearby,
       trespassing,
     };
@@ -108,6 +124,9 @@ export class Session {
     this.field.draw(line, task.net);
     this.paths.set(task.id, line);
     this.drawn[task.net]?.add(task.id);
+    const former = this.boxes[task.net];
+    const around = boxAround([...line.map(dot), ...(former === undefined ? [] : [former])]);
+    if (around !== undefined) this.boxes[task.net] = around;
   }
 
   /** Points at which a line crosses or runs into lines of other nets. */
