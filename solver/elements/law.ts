@@ -14,6 +14,12 @@ export interface ElementLaw<Operating = unknown> {
   readonly parameters: readonly string[];
   /** Internal nodes: unknown voltages of the element's own. */
   readonly internals: readonly string[];
+  /**
+   * The terminal that each internal node stands behind, reached through a conductance alone. A small resistance turns
+   * the last digit of a voltage into a current: what is left over in the internal node's row is that rounding, and
+   * belongs to the terminal's current.
+   */
+  readonly behind?: readonly number[];
   /** Branches: unknown currents of the element's own, each with a row in volts. */
   readonly branches: readonly string[];
   /** Local (row, column) of every Jacobian entry that may ever be other than zero; the order of the slots. */

@@ -64,3 +64,9 @@ export function createAcceptedSolve(
     return operations.isWithin(backwardErrorBound, answer, given) ? solved : improve(given, answer);
   };
 }
+
+/** Refuses a right-hand side of the wrong length, with both lengths. */
+export function checkLength(b: Float64Array, size: number): void {
+  if (b.length !== size && b.length !== size + 1)
+    throw new RangeError(`solve: right-hand side has length ${b.length}, the matrix size ${size}`);
+}

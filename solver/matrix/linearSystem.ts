@@ -1,5 +1,5 @@
 /** Solves A·x = b again and again for matrices of one pattern. */
-import { createAcceptedSolve, type SolveOperations } from './acceptedSolve.ts';
+import { checkLength, createAcceptedSolve, type SolveOperations } from './acceptedSolve.ts';
 import {
   backwardError,
   equationsOf,
@@ -110,10 +110,4 @@ export function createLinearSystem(pattern: SparsePattern): LinearSystem {
     determinantSign: () => (state === 'ready' ? determinantSign(factors!.places, factors!.inversePivot) : 0),
     logDeterminant: () => (state === 'ready' ? logDeterminant(factors!.inversePivot) : -Infinity),
   };
-}
-
-/** Refuses a right-hand side of the wrong length, with both lengths. */
-export function checkLength(b: Float64Array, size: number): void {
-  if (b.length !== size && b.length !== size + 1)
-    throw new RangeError(`solve: right-hand side has length ${b.length}, the matrix size ${size}`);
 }

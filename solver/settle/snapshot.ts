@@ -32,7 +32,12 @@ export function settlementOf(
   };
   const terminalCurrents = (element: Element): Float64Array => {
     const { unknown } = place(element);
-    return currents.slice(unknown, unknown + element.law.terminals.length);
+    const { terminals, behind = [] } = element.law;
+    const into = currents.slice(unknown, unknown + terminals.length);
+    behind.forEach((terminal, index) => {
+      into[terminal] = at(into, terminal) + at(currents, unknown + terminals.length + index);
+    });
+    return into;
   };
   return {
     settled: true,

@@ -33,7 +33,7 @@ describe('every example', () => {
           sums.set(part, { sum: entry.sum + (amps ?? Number.NaN), pins: entry.pins + 1 });
         }
         for (const [part, { sum, pins }] of sums) {
-          if (pins > 1) expect(Math.abs(sum), `${stateName} ${part}`).toBeLessThan(1e-12);
+          if (pins > 1) expect(Math.abs(sum), `${stateName} ${part}`).toBeLessThan(1e-15);
         }
       }
     });

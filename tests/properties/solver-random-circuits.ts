@@ -113,12 +113,13 @@ function draw(random: () => number, { law, mosfets = 12, mixed = false }: Random
       const gain = spread(1e2, 1e6);
       if (chance(0.5)) elements.push(amplifier('U1', [free(), any(), free(), 1, 0], { gain }));
       else {
-        // Nothing holds an ideal output but its own feedback: inverting input and output are the amplifier's own.
+        // Nothing holds an ideal output but its own feedback: inverting input and output are the amplifier's own,
+        // and the other input stands on a rail, or the output might drive itself off without end.
         nodes.push('summing', 'output');
         const summing = nodes.length - 2;
         const output = nodes.length - 1;
         elements.push(
-          amplifier('U1', [any(), summing, output], { gain }),
+          amplifier('U1', [whole(0, 2), summing, output], { gain }),
           resistor('RF', [output, summing], { resistance: spread(1e3, 1e6) }),
           resistor('RI', [summing, whole(0, nodes.length - 3)], { resistance: spread(1e3, 1e6) }),
           resistor('RL', [output, whole(0, nodes.length - 3)], { resistance: spread(1e3, 1e6) }),

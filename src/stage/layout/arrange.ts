@@ -57,7 +57,7 @@ export const arrange = (
     const rows = rowsFor.get(lowered) ?? rowsOf(cells, twins, flow.leftPin, lowered);
     rowsFor.set(lowered, rows);
     const turned: Flow = { ...flow, facing };
-    const room = new Map(order.map((cell) => [cell, roomOf(cell, rows, turned, hosted)]));
+    const room = new Map(order.map((cell) => [cell, roomOf(cell, rows, turned, order, hosted)]));
     const axes = axesOf(order, turned, room, stretch);
     const places = cellPlaces(axes, rows, turned, hosted);
     attach(loose, places, rows);
@@ -139,10 +139,9 @@ const better = (
   const stacks = first.order.flatMap(({ units }) => units.filter(({ role }) => role === 'stack'));
   for (let gained = true; gained && goesOn(trials);) {
     gained = false;
-    for (const unit of stacks) {
-      const facing = new Set(choice.facing);
-      if (!facing.delete(unit)) facing.add(unit);
-      gained = tryIf({ facing }) || gained;
+    const flips = first.order.map(({ units }) => units.filter(({ role }) => role === 'stack'));
+    for (const flip of [...flips, ...stacks.map((unit) => [unit])]) {
+      if (flip.length > 0) gained = tryIf({ facing: flipped(choice.facing, flip) }) || gained;
     }
     for (const cell of first.order)
       gained = moved(cell, choice.order).some((order) => tryIf({ order })) || gained;
@@ -156,6 +155,12 @@ const better = (
     if (price >= weights.blocked) attempt({ stretch });
   }
   return best;
+};
+
+const flipped = (facing: ReadonlySet<Unit>, units: readonly Unit[]): ReadonlySet<Unit> => {
+  const next = new Set(facing);
+  for (const unit of units) if (!next.delete(unit)) next.add(unit);
+  return next;
 };
 
 /** The orders in which one cell has changed places, the nearest first. */

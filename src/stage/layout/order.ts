@@ -1,6 +1,6 @@
 /** Who stands left of whom: signals run from left to right. */
 import type { Cell } from './cells.ts';
-import { isListener, type Net, type Unit } from './circuit.ts';
+import { isListener, type Member, type Net, type Unit } from './circuit.ts';
 import { listenerIn } from './cells.ts';
 import type { Twins } from './pairs.ts';
 
@@ -77,27 +77,37 @@ export const flowOf = (cells: readonly Cell[], twins: readonly Twins[], signals:
 
 const noNet: Net = { index: -1, members: [], joints: [], power: null };
 
-/** A tag is an output where something on its net drives it. */
+/** A tag is an output where, by wires and two-pin parts, the nearest thing that drives is no farther than one that listens. */
 const outputsOf = (cells: readonly Cell[]): ReadonlySet<Unit> => {
   const outputs = new Set<Unit>();
   for (const { form, units } of cells) {
     const [unit] = units;
-    if (form !== 'symbol' || unit?.role !== 'tag') continue;
-    for (const net of unit.nets.values()) {
-      const heard = net.members.some(isListener);
-      const driven = net.members.some(
-        (member) =>
-          !isListener(member) &&
-          (member.unit.role === 'stack' ||
-            member.unit.role === 'tapped' ||
-            member.unit.headings.get(member.pin) === 0) &&
-          member.unit.role !== 'two-pin',
-      );
-      if (driven || !heard) outputs.add(unit);
-    }
+    if (form === 'symbol' && unit?.role === 'tag' && [...unit.nets.values()].every(isDriven))
+      outputs.add(unit);
   }
   return outputs;
 };
+
+const isDriven = (start: Net): boolean => {
+  const seen = new Set([start]);
+  let ring = [start];
+  while (ring.length > 0) {
+    const members = ring.flatMap((net) => net.members);
+    if (members.some(drives)) return true;
+    if (members.some(isListener)) return false;
+    const next = members.flatMap(({ unit }) => (unit.role === 'two-pin' ? [...unit.nets.values()] : []));
+    ring = [...new Set(next)].filter((net) => net.power === null && !seen.has(net));
+    for (const net of ring) seen.add(net);
+  }
+  return true;
+};
+
+/** A pin at which a unit gives a level of its own: a channel's ends, a tap, the output of a block. */
+const drives = (member: Member): boolean =>
+  !isListener(member) &&
+  (member.unit.role === 'stack' ||
+    member.unit.role === 'tapped' ||
+    (member.unit.role === 'block' && member.unit.headings.get(member.pin) === 0));
 
 /** How many steps a net is from where the signals come in. */
 const stagesOf = (

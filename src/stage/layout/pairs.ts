@@ -1,13 +1,16 @@
-/** Transistors that belong side by side: the two of a pair on one tail, and those of a mirror on one gate line. */
+/**
+ * Transistors that belong side by side: the two of a pair on one tail, those of a mirror on one gate line, and two that
+ * steer each other.
+ */
 import { carryingPins, pinPointing, type Net, type Unit } from './circuit.ts';
 import type { Cell } from './cells.ts';
 import type { Upright } from './columns.ts';
 
 export interface Twins {
-  /** Stand in the same row. The gate of the first faces right for a mirror, of the second for a pair. */
+  /** Stand in the same row. The gate of the second faces right for a pair, otherwise that of the first. */
   readonly first: Unit;
   readonly second: Unit;
-  readonly form: 'pair' | 'mirror';
+  readonly form: 'pair' | 'mirror' | 'crossed';
   /** The net that the two of a pair share. */
   readonly tail: Net | undefined;
 }
@@ -41,6 +44,11 @@ export const twinsOf = (cells: readonly Cell[]): readonly Twins[] => {
       const [one, two] = [a.upright.unit, b.upright.unit];
       if (a.cell === b.cell || !alike(a.upright, b.upright) || taken.has(two)) continue;
       const gates = [gateOf(one), gateOf(two)];
+      if (!taken.has(one) && carries(one, gates[1]) && carries(two, gates[0])) {
+        taken.add(one).add(two);
+        twins.push({ first: one, second: two, form: 'crossed', tail: undefined });
+        continue;
+      }
       const tail = sharedEnd(a.upright, b.upright);
       if (tail !== undefined && gates[0] !== gates[1] && !taken.has(one)) {
         taken.add(one).add(two);
@@ -59,7 +67,7 @@ export const twinsOf = (cells: readonly Cell[]): readonly Twins[] => {
 };
 
 /** Whether a transistor's gate is wired to one of the pins between which it carries. */
-const isTied = (unit: Unit): boolean => {
-  const gate = gateOf(unit);
-  return gate !== undefined && (carryingPins(unit) ?? []).some((pin) => unit.nets.get(pin) === gate);
-};
+const isTied = (unit: Unit): boolean => carries(unit, gateOf(unit));
+
+const carries = (unit: Unit, net: Net | undefined): boolean =>
+  net?.power === null && (carryingPins(unit) ?? []).some((pin) => unit.nets.get(pin) === net);

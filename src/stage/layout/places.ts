@@ -26,7 +26,7 @@ export const hostsOf = (cells: readonly Cell[], symbols: readonly Unit[]): Hoste
   for (const unit of symbols) {
     for (const net of unit.nets.values()) {
       const ends = cells.filter(({ column }) =>
-        unit.role === 'rail' ? column[0]?.upper === net : column.at(-1)?.lower === net,
+        net.power === 'top' ? column[0]?.upper === net : column.at(-1)?.lower === net,
       );
       const stacked = ends.filter(({ column }) => column.some((upright) => upright.unit.role === 'stack'));
       const cell = [...stacked, ...ends].find(({ rank }) => !used.has(`${unit.role} ${rank}`));
@@ -71,21 +71,34 @@ export const cellPlaces = (
     for (const unit of cell.column.length > 0 ? [] : cell.units) {
       const y = rows.middles.get(unit) ?? 0;
       const right = (cell.form === 'lying' && flow.leftPin.get(unit) === 1) || false;
-      const entering = unit.role === 'tag' && !flow.outputs.has(unit);
-      places.set(unit, { at: [x, y], turn: right ? 180 : 0, mirror: entering });
+      places.set(unit, { at: [x, y], turn: right ? 180 : 0, mirror: isLeftTag(cell, axes.keys()) });
     }
   }
   for (const [unit, { cell, net }] of hosted) {
     const level = rows.levels.get(net) ?? 0;
     // Joints of the net take its level; the symbol then stands clear of them.
     const clear = net.joints.length > 0 ? spacing.power : 0;
+    const above = net.power === 'top';
+    // A negative rail hangs below its wire.
     places.set(unit, {
-      at: [axes.get(cell) ?? 0, unit.role === 'rail' ? level - clear : level + clear],
-      turn: 0,
+      at: [axes.get(cell) ?? 0, above ? level - clear : level + clear],
+      turn: unit.role === 'rail' && !above ? 180 : 0,
       mirror: false,
     });
   }
   return places;
+};
+
+/** Whether a tag stands left of most of what it is wired to, so that it points to the right. */
+export const isLeftTag = (tag: Cell, order: Iterable<Cell>): boolean => {
+  if (tag.units[0]?.role !== 'tag') return false;
+  let balance = 0;
+  let passed = false;
+  for (const cell of order) {
+    if (cell === tag) passed = true;
+    else if ([...cell.nets].some((net) => tag.nets.has(net))) balance += passed ? 1 : -1;
+  }
+  return balance > 0;
 };
 
 /** A unit as it stands at a place. */

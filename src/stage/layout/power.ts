@@ -4,6 +4,7 @@ import {
   carryingPins,
   isListener,
   isSource,
+  listeners,
   resistanceOf,
   voltageOf,
   type Circuit,
@@ -26,7 +27,10 @@ export const markPower = (circuit: Circuit): ReadonlySet<Unit> => {
     if (unit.role !== 'ground') continue;
     for (const net of unit.nets.values()) net.power = 'bottom';
   }
-  const signals = new Set<Unit>();
+  // A block without inputs (the last stage of a logic circuit) is where a signal comes from.
+  const signals = new Set(
+    circuit.units.filter((unit) => unit.role === 'block' && listeners(unit).length === 0),
+  );
   const rails = new Map<string, Unit[]>();
   for (const unit of circuit.units) {
     if (unit.role !== 'rail') continue;

@@ -4,6 +4,7 @@ import { kindNamed } from '../../parts/catalogue.ts';
 import type { Cell } from './cells.ts';
 import type { Net, Unit } from './circuit.ts';
 import type { Flow } from './order.ts';
+import { isLeftTag } from './places.ts';
 import type { Rows } from './rows.ts';
 import { spacing } from './spacing.ts';
 
@@ -15,10 +16,12 @@ export const roomOf = (
   cell: Cell,
   rows: Rows,
   flow: Flow,
+  order: readonly Cell[],
   symbols: ReadonlyMap<Unit, { readonly cell: Cell; readonly net: Net }>,
 ): readonly GridBox[] => {
   const boxes: GridBox[] = [];
-  for (const unit of cell.units) boxes.push(...unitRoom(cell, unit, rows.middles.get(unit) ?? 0, flow));
+  for (const unit of cell.units)
+    boxes.push(...unitRoom(cell, unit, rows.middles.get(unit) ?? 0, flow, order));
   let top = Infinity;
   let bottom = -Infinity;
   for (const { upper, lower } of cell.column) {
@@ -34,8 +37,16 @@ export const roomOf = (
     if (host !== cell) continue;
     const level = rows.levels.get(net) ?? 0;
     const half = Math.max(1.5, ((unit.label?.length ?? 0) + 7) * letter * 0.5);
-    if (unit.role === 'rail') boxes.push({ left: -half, right: half, top: level - 3.5, bottom: level });
-    else boxes.push({ left: -1.2, right: 1.2, top: level, bottom: level + 3 });
+    if (unit.role === 'rail') {
+      const above = net.power === 'top';
+      boxes.push({
+        left: -half,
+        right: half,
+        top: above ? level - 3.5 : level,
+        bottom: above ? level : level + 3.5,
+      });
+    }
+    if (unit.role === 'ground') boxes.push({ left: -1.2, right: 1.2, top: level, bottom: level + 3 });
   }
   return boxes;
 };
@@ -50,7 +61,13 @@ export const letteringWidth = (unit: Unit): number => {
   return 1.25 + Math.max(longest * letter, spacing.lettering - 1.25);
 };
 
-const unitRoom = (cell: Cell, unit: Unit, y: number, flow: Flow): readonly GridBox[] => {
+const unitRoom = (
+  cell: Cell,
+  unit: Unit,
+  y: number,
+  flow: Flow,
+  order: readonly Cell[],
+): readonly GridBox[] => {
   const { half } = spacing;
   if (unit.role === 'stack') {
     const away = flow.facing.has(unit) ? -1 : 1;
@@ -75,8 +92,8 @@ const unitRoom = (cell: Cell, unit: Unit, y: number, flow: Flow): readonly GridB
   if (unit.role === 'rail') return [{ left: -half, right: half, top: y - 3.5, bottom: y }];
   const length = (unit.label?.length ?? 3) * letter + 2;
   return [
-    flow.outputs.has(unit)
-      ? { left: 0, right: length, top: y - 1, bottom: y + 1 }
-      : { left: -length, right: 0, top: y - 1, bottom: y + 1 },
+    isLeftTag(cell, order)
+      ? { left: -length, right: 0, top: y - 1, bottom: y + 1 }
+      : { left: 0, right: length, top: y - 1, bottom: y + 1 },
   ];
 };

@@ -10,7 +10,8 @@ import { routeWires } from '../../../src/stage/routing/index.ts';
 import type { StateReadings } from '../../../src/readings/readings.ts';
 import { amplifierChain, example, settled } from './support/stages.ts';
 
-const document = example('echo-preamplifier');
+/** Without a date of its own, so that the plate's is shown. */
+const { date: ownDate, ...document } = example('echo-preamplifier');
 const plate = (
   options: Partial<PlateOptions> = {},
   readings: StateReadings | null = settled(document, options.state),
@@ -40,6 +41,17 @@ describe('a plate', () => {
     ]) {
       expect(all).toContain(expected);
     }
+  });
+
+  it('shows the date of the stage where it has one', () => {
+    const dated = drawPlate(example('echo-preamplifier'), null, {
+      density: 'all',
+      routes: routeWires(document),
+      date: '2031-05-06',
+      program: 'Restpoint 9.8.7',
+    });
+    expect(texts(dated)).toContain(ownDate);
+    expect(texts(dated)).not.toContain('2031-05-06');
   });
 
   it('lists every transistor with its duty and verdict', () => {
