@@ -70,7 +70,7 @@ export const badgeSheet = (): Drawing =>
   drawingOf(
     signs.flatMap((sign, row) =>
       [...verdicts, 'stale' as const].flatMap((verdict, column) => {
-        const [x, y] = [column * 120, row * 80];
+        const [x, y] = [column * 170, row * 80];
         const id = `badge${row}/${verdict}`;
         const whole: BadgeSign =
           verdict === 'stale' ? { ...sign, verdict: 'held', stale: true } : { ...sign, verdict };
