@@ -146,7 +146,7 @@ describe('settle', () => {
     expect(settle(ready, warm).settled).toBe(true);
   });
 
-  it('names an output that nothing limits: positive feedback round an ideal amplifier', () => {
+  it('finds the one balance of an ideal amplifier with positive feedback, unstable as it is', () => {
     const ready = prepared(
       ['in', 'out'],
       [
