@@ -30,7 +30,7 @@ const mostEffort = 800_000;
 const lowering = 3;
 
 /** What a fault of a drawing weighs against a grid unit of wire. */
-const weights = { blocked: 500, crossing: 30, bend: 3, against: 12, length: 0.4, size: 0.35 } as const;
+const weights = { blocked: 500, crossing: 30, bend: 3, against: 20, length: 0.4, size: 0.35 } as const;
 
 export const arrange = (
   document: DrawnStage,
@@ -48,9 +48,7 @@ export const arrange = (
     (unit) => unit.role === 'ground' || (unit.role === 'rail' && !isSignalRail(unit, signals)),
   );
   const hosted = hostsOf(cells, symbols);
-  const loose = group.filter(
-    (unit) => unit.role === 'probe' || (symbols.includes(unit) && !hosted.has(unit)),
-  );
+  const loose = group.filter((unit) => unit.role === 'probe' || symbols.includes(unit));
 
   const rowsFor = new Map<Choice['lowered'], Rows>();
   const build = ({ order, facing, lowered, stretch }: Choice): Arrangement => {

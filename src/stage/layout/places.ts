@@ -29,9 +29,9 @@ export const hostsOf = (cells: readonly Cell[], symbols: readonly Unit[]): Hoste
         net.power === 'top' ? column[0]?.upper === net : column.at(-1)?.lower === net,
       );
       const stacked = ends.filter(({ column }) => column.some((upright) => upright.unit.role === 'stack'));
-      const cell = [...stacked, ...ends].find(({ rank }) => !used.has(`${unit.role} ${rank}`));
+      const cell = [...stacked, ...ends].find(({ rank }) => !used.has(`${net.index} ${rank}`));
       if (cell === undefined) continue;
-      used.add(`${unit.role} ${cell.rank}`);
+      used.add(`${net.index} ${cell.rank}`);
       hosted.set(unit, { cell, net });
     }
   }
@@ -79,10 +79,13 @@ export const cellPlaces = (
     // Joints of the net take its level; the symbol then stands clear of them.
     const clear = net.joints.length > 0 ? spacing.power : 0;
     const above = net.power === 'top';
-    // A negative rail hangs below its wire.
+    const end = above ? cell.column[0] : cell.column.at(-1);
+    const middle = end === undefined ? undefined : rows.middles.get(end.unit);
+    // Wishes at odds (a part with both pins on one net) can leave the level on the wrong side of the column's end.
+    if (middle === undefined || (above ? middle - level : level - middle) <= spacing.half) continue;
     places.set(unit, {
       at: [axes.get(cell) ?? 0, above ? level - clear : level + clear],
-      turn: unit.role === 'rail' && !above ? 180 : 0,
+      turn: hangs(unit) ? 180 : 0,
       mirror: false,
     });
   }
@@ -130,7 +133,11 @@ const nearestFree = (
   for (const { at: anchor, toward } of anchors) {
     for (let dx = -16; dx <= 16; dx++) {
       for (let dy = -12; dy <= 12; dy++) {
-        const place: Place = { at: [anchor[0] + dx, anchor[1] + dy], turn: 0, mirror: false };
+        const place: Place = {
+          at: [anchor[0] + dx, anchor[1] + dy],
+          turn: hangs(unit) ? 180 : 0,
+          mirror: false,
+        };
         const price = priceOf(unit, dx, dy, toward);
         if (best !== undefined && price >= best.price) continue;
         const reach = reachOf(standUnit(unit, place));
@@ -148,10 +155,15 @@ const nearestFree = (
   return best?.place ?? { at: anchors[0]?.at ?? [0, 0], turn: 0, mirror: false };
 };
 
+/** A negative rail stands below its wire, upside down. */
+const hangs = (unit: Unit): boolean =>
+  unit.role === 'rail' && [...unit.nets.values()].some((net) => net.power === 'bottom');
+
 /** Straight in line is best; a rail likes to be above its pin, a ground below, a test point beside. */
 const priceOf = (unit: Unit, dx: number, dy: number, [tx, ty]: readonly [number, number]): number => {
   const along = dx * tx + dy * ty;
-  const liked = unit.role === 'rail' ? -3 : unit.role === 'ground' ? 3 : 0;
+  const below = unit.role === 'ground' || hangs(unit);
+  const liked = below ? 3 : unit.role === 'rail' ? -3 : 0;
   const bends = (dx !== 0 && dy !== 0 ? 3 : 0) + (along <= 0 ? 6 : 0);
   const far = unit.role === 'probe' ? Math.abs(Math.abs(dx) - 4) : Math.abs(dx);
   return far + Math.abs(dy - liked) * 1.5 + bends;
