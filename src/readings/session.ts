@@ -12,6 +12,7 @@ import { pointOf } from './point.ts';
 import { readState } from './readState.ts';
 import type { StateReadings } from './readings.ts';
 import { drawingSnags, structureSnag } from './snags/index.ts';
+import { straightAcrossSnags } from './snags/straightAcross.ts';
 import { unsettledState } from './unsettled.ts';
 
 export interface SettleConditions {
@@ -139,6 +140,13 @@ export class SettleSession {
         { reason: result.message, concerns: [...result.elements, ...result.nodes] },
         snags,
       );
+    }
+    if (result.straightAcross.length > 0) {
+      this.#start = null;
+      const straight = straightAcrossSnags(compiled, result.straightAcross);
+      const reason = straight.map(({ message }) => message).join('; ');
+      const concerns = [...new Set(straight.flatMap(({ parts }) => parts))];
+      return unsettledState({ reason, concerns }, [...straight, ...snags]);
     }
     this.#start = result.state;
     const bench = {

@@ -206,6 +206,28 @@ describe('what a drawing leaves open', () => {
     expect(JSON.stringify(state)).toMatch(/PS1/);
   });
 
+  it('a body diode straight across a reversed battery is the snag, never a reading of kiloamperes', async () => {
+    const parts = {
+      p1: { kind: 'supply', name: 'BT1', values: { voltage: -12, form: 'battery' } },
+      p2: { kind: 'mosfet', name: 'Q1', device: 'd1', duty: 'block' },
+      p3: { kind: 'ground' },
+    };
+    const wires = [
+      ['p1.plus', 'p2.drain'],
+      ['p2.source', 'p3.node'],
+      ['p2.gate', 'p3.node'],
+      ['p1.minus', 'p3.node'],
+    ] as const;
+    const state = await settled(stage(parts, wires, { devices: nChannel }), 'on');
+    if (state.settled) throw new Error('settled');
+    expect(state.reason).toContain('a junction of Q1 lies straight across BT1');
+    expect(state.concerns).toEqual(['Q1', 'BT1']);
+    expect(state.snags[0]).toMatchObject({ code: 'straight-across', severity: 'stop', parts: ['Q1', 'BT1'] });
+    // With the battery's own resistance stated there is something that limits the current, and so a reading.
+    const limited = { ...parts, p1: { ...parts.p1, values: { ...parts.p1.values, resistance: 1 } } };
+    expect((await settled(stage(limited, wires, { devices: nChannel }), 'on')).settled).toBe(true);
+  });
+
   it('no figure is ever NaN or infinite', async () => {
     const text = JSON.stringify(await settled(beacon, 'on'));
     expect(text).not.toMatch(/NaN|Infinity/);
