@@ -3,7 +3,7 @@
  * ends; tags of one label are one node, and the rail of that name with them; rails of one name are one node;
  * every ground is the reference; a mosfet's unwired body is joined to its source.
  */
-import { kindOf, partContext } from './partContext.ts';
+import { kindOf, partContext, wiredOf } from './partContext.ts';
 import type { StageDocument, WireEnd } from './schema/stage.ts';
 import { UnionFind } from './unionFind.ts';
 
@@ -90,17 +90,6 @@ export function connectivityOf(document: StageDocument): Connectivity {
     grounded,
     railsWithoutVoltage: railsWithoutVoltage(document),
   };
-}
-
-/** The pins of each part on which a wire ends. */
-export function wiredOf(
-  document: Pick<StageDocument, 'parts' | 'wires'>,
-): ReadonlyMap<string, ReadonlySet<string>> {
-  const wired = new Map<string, Set<string>>(Object.keys(document.parts).map((id) => [id, new Set()]));
-  for (const { ends } of Object.values(document.wires)) {
-    for (const [of, pin] of ends) if (pin !== undefined) wired.get(of)?.add(pin);
-  }
-  return wired;
 }
 
 const pinsOf = (document: StageDocument, wired: ReadonlyMap<string, ReadonlySet<string>>): readonly PinOf[] =>

@@ -4,13 +4,15 @@ import type { Part, StageDocument } from './schema/stage.ts';
 
 const nothing: Readonly<Record<string, unknown>> = {};
 
-/** The pins of a part on which a wire ends. */
-export function wiredPins(document: StageDocument, part: string): ReadonlySet<string> {
-  const pins = new Set<string>();
+/** The pins of each part on which a wire ends. */
+export function wiredOf(
+  document: Pick<StageDocument, 'parts' | 'wires'>,
+): ReadonlyMap<string, ReadonlySet<string>> {
+  const wired = new Map<string, Set<string>>(Object.keys(document.parts).map((id) => [id, new Set()]));
   for (const { ends } of Object.values(document.wires)) {
-    for (const [of, pin] of ends) if (of === part && pin !== undefined) pins.add(pin);
+    for (const [of, pin] of ends) if (pin !== undefined) wired.get(of)?.add(pin);
   }
-  return pins;
+  return wired;
 }
 
 /** The kind of a part of a document that was read. */
@@ -22,7 +24,7 @@ export function kindOf(part: Part): PartKind {
 
 /** What a kind is told of one part: `wired` is left to the caller who has it for all parts at once. */
 export function partContext(
-  document: Pick<StageDocument, 'parts' | 'devices' | 'wires'>,
+  document: Pick<StageDocument, 'parts' | 'devices'>,
   id: string,
   wired: ReadonlySet<string>,
 ): PartContext {
@@ -38,11 +40,27 @@ export function partContext(
   };
 }
 
-/** Names of a part's pins, in the order of the stage file's table. They do not depend on what is wired. */
-export const pinNames = (
-  document: Pick<StageDocument, 'parts' | 'devices' | 'wires'>,
+/** Whether a part names no device and needs none, or one that there is and that is of a type its kind takes. */
+export function deviceFits(
+  document: Pick<StageDocument, 'devices'>,
+  part: Part,
+  device = part.device,
+): boolean {
+  const { deviceTypes } = kindOf(part);
+  if (device === undefined) return deviceTypes.length === 0;
+  const found = Object.hasOwn(document.devices, device) ? document.devices[device] : undefined;
+  return found !== undefined && deviceTypes.includes(found.type);
+}
+
+/**
+ * Names of a part's pins, in the order of the stage file's table. They do not depend on what is wired; they may on
+ * the device, so that of a part whose device does not fit (while a file is checked) nothing is known.
+ */
+export function pinNames(
+  document: Pick<StageDocument, 'parts' | 'devices'>,
   id: string,
-): readonly string[] => {
+): readonly string[] | undefined {
   const part = document.parts[id];
-  return part === undefined ? [] : Object.keys(kindOf(part).pins(partContext(document, id, new Set())));
-};
+  if (part === undefined || !deviceFits(document, part)) return undefined;
+  return Object.keys(kindOf(part).pins(partContext(document, id, new Set())));
+}

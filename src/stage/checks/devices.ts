@@ -1,5 +1,5 @@
 import type { Fault } from '../../values/result.ts';
-import { kindOf, partContext, wiredPins } from '../partContext.ts';
+import { deviceFits, kindOf, partContext, wiredOf } from '../partContext.ts';
 import type { StageDocument } from '../schema/stage.ts';
 import { faultAt, listed } from './fault.ts';
 
@@ -18,15 +18,16 @@ export function checkDevices(document: StageDocument): readonly Fault[] {
     const of = document.parts[part];
     if (of === undefined) return false;
     const { deviceTypes } = kindOf(of);
-    if (deviceTypes.includes(found.type)) return true;
+    if (deviceFits(document, of, device)) return true;
     const message = `Device ${device} is a ${found.type}, and part ${part} is a ${of.kind}: choose another device.`;
     faults.push(faultAt(path, 'device-does-not-fit', message, found.type, listed(deviceTypes, 'no device')));
     return false;
   };
 
+  const wired = wiredOf(document);
   for (const [id, part] of Object.entries(document.parts)) {
     if (part.device !== undefined && !check(['parts', id, 'device'], id, part.device)) continue;
-    for (const fault of kindOf(part).check(partContext(document, id, wiredPins(document, id)))) {
+    for (const fault of kindOf(part).check(partContext(document, id, wired.get(id) ?? new Set()))) {
       faults.push({ ...fault, path: fault.path === undefined ? `parts.${id}` : `parts.${id}.${fault.path}` });
     }
     if (part.mismatch !== undefined && part.lot === undefined) {
