@@ -5,14 +5,19 @@ import type { Notice } from '../readings.ts';
 
 const sources = new Set(['supply', 'rail']);
 
-/** Rails and supplies with a pin on a node of the element, the reference left out. */
+/** Rails and supplies with a pin on a node that the element's current passes, the reference left out. */
 const sourcesAt = (compiled: CompiledStage, element: Element): readonly CompiledPart[] =>
   compiled.parts.filter(
     (part) =>
       sources.has(part.part.kind) &&
       part.pins.some((pin) => {
         const net = netOfPin(compiled.connectivity, part.id, pin);
-        return net.index !== 0 && element.nodes.some((node) => compiled.nets[node] === net);
+        return (
+          net.index !== 0 &&
+          element.nodes.some(
+            (node, terminal) => !element.law.senses.includes(terminal) && compiled.nets[node] === net,
+          )
+        );
       }),
   );
 

@@ -211,11 +211,13 @@ describe('what a drawing leaves open', () => {
       p1: { kind: 'supply', name: 'BT1', values: { voltage: -12, form: 'battery' } },
       p2: { kind: 'mosfet', name: 'Q1', device: 'd1', duty: 'block' },
       p3: { kind: 'ground' },
+      // Drives the gate alone, and is not named.
+      p4: { kind: 'rail', name: 'DRIVE', values: { voltage: 0 } },
     };
     const wires = [
       ['p1.plus', 'p2.drain'],
       ['p2.source', 'p3.node'],
-      ['p2.gate', 'p3.node'],
+      ['p2.gate', 'p4.node'],
       ['p1.minus', 'p3.node'],
     ] as const;
     const state = await settled(stage(parts, wires, { devices: nChannel }), 'on');
