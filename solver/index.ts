@@ -51,6 +51,8 @@ export {
 // --- Settling ---
 export { prepare, type Preparation } from './settle/prepare.ts';
 export type { Prepared } from './settle/prepared.ts';
+export type { Surroundings } from './settle/refresh.ts';
+export { resettle } from './settle/resettle.ts';
 export { settle } from './settle/settle.ts';
 export type {
   Budget,

@@ -38,6 +38,8 @@ export interface ElementLaw<Operating = unknown> {
 
   /** How direct current can pass, at the present values; for the structure checks and the hull of the rails. */
   paths(values: Float64Array): readonly Path[];
+  /** Places in `values` on which `paths` depends otherwise than by a source's voltage; absent where on none. */
+  readonly pathValues?: readonly number[];
 
   /** Works out what depends on values and temperature only, into `derived` from index `at`. */
   derive(values: Float64Array, conditions: Conditions, derived: Float64Array, at: number): void;
@@ -65,7 +67,7 @@ export type Path =
   | { readonly kind: 'channel'; readonly from: number; readonly to: number }
   /** A junction, `from` anode `to` cathode. Passive. */
   | { readonly kind: 'junction'; readonly from: number; readonly to: number }
-  /** Voltage source, plus `from`, minus `to`, V; `ideal` where nothing is in series. */
+  /** Voltage source, plus `from`, minus `to`; `voltage` is the place in `values`; `ideal` where nothing is in series. */
   | {
       readonly kind: 'source';
       readonly from: number;

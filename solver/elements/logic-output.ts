@@ -76,6 +76,8 @@ export const logicOutputLaw: ElementLaw<LogicOutputOperating> = {
     return [...driven, { kind: 'junction', from: OUT, to: HIGH }, { kind: 'junction', from: LOW, to: OUT }];
   },
 
+  pathValues: [0],
+
   derive(values, { temperature, leak }, derived, at) {
     const level = values[0]!;
     derived[at + HIGH_CONDUCTANCE] = level === 1 ? 1 / Math.max(values[1]!, RESISTANCE_FLOOR) : 0;

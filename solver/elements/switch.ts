@@ -32,6 +32,7 @@ export const switchLaw: ElementLaw<TwoTerminalOperating> = {
   derivedSize: 3,
   memorySize: 0,
   paths: (values) => (values[0]! !== 0 || values[2]! > 0 ? [{ kind: 'passive', from: 0, to: 1 }] : []),
+  pathValues: [0, 2],
   derive(values, _conditions, derived, at) {
     derived[at] = values[0]!; // 0: open
     derived[at + 1] = Math.max(values[1]!, RESISTANCE_FLOOR); // Ω

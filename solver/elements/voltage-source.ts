@@ -31,7 +31,8 @@ export const voltageSourceLaw: ElementLaw<SourceOperating> = {
   senses: [],
   derivedSize: 2,
   memorySize: 0,
-  paths: (values) => [{ kind: 'source', from: 0, to: 1, voltage: values[0]!, ideal: !(values[1]! > 0) }],
+  paths: (values) => [{ kind: 'source', from: 0, to: 1, voltage: 0, ideal: !(values[1]! > 0) }],
+  pathValues: [1],
   derive(values, _conditions, derived, at) {
     derived[at] = values[0]!;
     derived[at + 1] = values[1]!;

@@ -1,9 +1,10 @@
 /** A circuit made ready: unknowns numbered, pattern and slots resolved, elements laid out by law. Done once. */
+import { codeAt, indexAt } from '../elements/at.ts';
 import type { Circuit, Element } from '../circuit.ts';
 import { Phase, type Batch, type ElementLaw, type Workspace } from '../elements/law.ts';
 import { createLinearSystem, type LinearSystem } from '../matrix/linearSystem.ts';
 import { createPattern, type EntryPlace } from '../matrix/pattern.ts';
-import { emptyHull, type Hull } from '../structure/hull.ts';
+import { findHull, type Hull } from '../structure/hull.ts';
 
 /** What an unknown is, and so how its step is limited. */
 export const UnknownKind = {
@@ -28,6 +29,8 @@ export interface ElementPlace {
   readonly memory: number;
   /** First place in `seenValues`. */
   readonly value: number;
+  /** Whether its values hold the voltage of a source. */
+  readonly isSource: boolean;
 }
 
 /**
@@ -70,7 +73,8 @@ export interface Prepared {
   readonly magnitude: Float64Array;
   readonly rounding: Float64Array;
 
-  readonly hull: Hull;
+  /** Replaced when a value changes how direct current can pass. */
+  hull: Hull;
 
   // --- What `derived` was worked out from ---
   readonly seenValues: Float64Array;
@@ -80,7 +84,6 @@ export interface Prepared {
 
 /** Numbers and lays out a circuit whose structure is known to be sound. */
 export function layOut(circuit: Circuit): Prepared {
-  const nodeCount = circuit.nodes.length;
   const unknownNames: string[] = circuit.nodes.slice(1);
   const rowKinds: number[] = unknownNames.map(() => 0);
 
@@ -98,7 +101,6 @@ export function layOut(circuit: Circuit): Prepared {
   const entryRows: number[] = [];
   const entryColumns: number[] = [];
   const lagging: EntryPlace[] = [];
-  let internalCount = 0;
   let derived = 0;
   let memory = 0;
   let value = 0;
@@ -109,7 +111,17 @@ export function layOut(circuit: Circuit): Prepared {
       batch: { count: group.length, unknown: gather.length, slot: entryRows.length, derived, memory },
     });
     for (const { element, index } of group) {
-      places.push({ element, index, unknown: gather.length, slot: entryRows.length, derived, memory, value });
+      const isSource = law.paths(element.values).some(({ kind }) => kind === 'source');
+      places.push({
+        element,
+        index,
+        unknown: gather.length,
+        slot: entryRows.length,
+        derived,
+        memory,
+        value,
+        isSource,
+      });
       const local = element.nodes.map((node) => node - 1);
       for (const name of law.internals) local.push(addUnknown(`${element.name}.${name}`, 0));
       for (const name of law.branches) local.push(addUnknown(`${element.name}.${name}`, 1));
@@ -119,7 +131,6 @@ export function layOut(circuit: Circuit): Prepared {
         entryColumns.push(local[column] ?? -1);
       }
       for (const [row, column] of law.lags ?? []) lagging.push([local[row] ?? -1, local[column] ?? -1]);
-      internalCount += law.internals.length;
       derived += law.derivedSize;
       memory += law.memorySize;
       value += element.values.length;
@@ -141,7 +152,7 @@ export function layOut(circuit: Circuit): Prepared {
   const orReference = (unknown: number) => (unknown < 0 ? size : unknown);
 
   const byIndex = [...places].sort((a, b) => a.index - b.index);
-  return {
+  const prepared: Prepared = {
     circuit,
     size,
     kinds: Uint8Array.from(rowKinds, (kind) => (kind === 1 ? UnknownKind.branch : UnknownKind.bound)),
@@ -175,9 +186,26 @@ export function layOut(circuit: Circuit): Prepared {
     residual: new Float64Array(size + 1),
     magnitude: new Float64Array(size + 1),
     rounding: new Float64Array(size + 1),
-    hull: emptyHull(nodeCount + internalCount),
+    hull: findHull(circuit),
     seenValues: new Float64Array(value).fill(NaN),
     seenTemperatures: new Float64Array(places.length).fill(NaN),
     seenLeaks: new Float64Array(places.length).fill(NaN),
   };
+  updateKinds(prepared);
+  return prepared;
+}
+
+/** Works out the kind of every node from the hull. */
+export function updateKinds({ circuit, hull, kinds, places, gather }: Prepared): void {
+  const kindOf = (node: number): number => {
+    if (codeAt(hull.pinned, node) === 1) return UnknownKind.pinned;
+    return codeAt(hull.bound, node) === 1 ? UnknownKind.bound : UnknownKind.loose;
+  };
+  for (let node = 1; node < circuit.nodes.length; node++) kinds[node - 1] = kindOf(node);
+  let internal = circuit.nodes.length;
+  for (const { element, unknown } of places) {
+    const { terminals, internals } = element.law;
+    for (let k = 0; k < internals.length; k++)
+      kinds[indexAt(gather, unknown + terminals.length + k)] = kindOf(internal++);
+  }
 }

@@ -2,96 +2,127 @@
  * The hull of the rails: the interval no node can leave where only voltage sources, resistors, junctions and
  * transistors drive (the no-gain property: Willson 1975). It follows from the sources alone.
  */
-import type { Circuit } from '../circuit.ts';
-import { graphOf } from './graph.ts';
+import type { Circuit, Element } from '../circuit.ts';
+import { at } from '../elements/at.ts';
+import { graphOf, type Edge } from './graph.ts';
 
 export interface Hull {
   /** V, of all rails, the reference included, at the values last looked at. */
   low: number;
   high: number;
-  /** By node, then by internal node as in the graph: 1 where the node must stay inside; 0 where a forced or driven current reaches it. */
+  /** By node, then by internal node as in the graph: 1 where it must stay inside; 0 where a forced current reaches. */
   readonly bound: Uint8Array;
   /** Likewise: 1 where voltage sources alone hold the node against the reference. */
   readonly pinned: Uint8Array;
+  /** Sources by which the reference reaches nodes, in order: each makes the potential of `node` known. */
+  readonly tree: readonly Source[];
+  /** The other sources: they close loops, or float. */
+  readonly others: readonly Source[];
+  /** V, by node; 0 where the tree does not reach. */
+  readonly potential: Float64Array;
 }
 
-/** A hull still to be worked out. */
-export const emptyHull = (size: number): Hull => ({
-  low: 0,
-  high: 0,
-  bound: new Uint8Array(size).fill(1),
-  pinned: new Uint8Array(size),
-});
-
-interface Edge {
-  readonly a: number;
-  readonly b: number;
-  /** V of a less b. */
-  readonly voltage: number;
-  readonly ideal: boolean;
+interface Source {
+  readonly element: Element;
+  /** Place of its voltage in the element's values. */
+  readonly value: number;
+  readonly known: number;
+  readonly node: number;
+  /** +1 where `node` is the plus end. */
+  readonly sign: 1 | -1;
 }
 
-/** Works the hull out anew from the present values. Not in the inner loop. */
-export function updateHull(circuit: Circuit, hull: Hull): void {
-  const sources: Edge[] = [];
-  const conducts: [number, number][] = [];
-  const driven: number[] = [];
-  const drivenIdeal: [number, number][] = [];
-  const graph = graphOf(circuit);
-  for (const { path, from: a, to: b } of graph.edges) {
-    if (path.kind === 'source') sources.push({ a, b, voltage: path.voltage, ideal: path.ideal });
-    else if (path.kind === 'current' || path.kind === 'driven') {
-      driven.push(a, b);
-      if (path.kind === 'driven' && path.ideal) drivenIdeal.push([a, b]);
-    } else conducts.push([a, b]);
-  }
+/** Works out the hull of a circuit at its present values. */
+export function findHull(circuit: Circuit): Hull {
+  const { size, edges } = graphOf(circuit);
+  const sources = edges.filter(({ path }) => path.kind === 'source');
 
-  // --- Potentials that sources fix, each as an interval: sources with resistance, or in a loop, widen it ---
-  const known = new Map<number, number>([[0, 0]]);
-  hull.pinned.fill(0);
-  hull.pinned[0] = 1;
+  const pinned = new Uint8Array(size);
+  pinned[0] = 1;
+  const ideal = sources.filter(({ path }) => path.kind === 'source' && path.ideal);
+  for (const { node } of spanningTree(ideal)) pinned[node] = 1;
+  const tree = spanningTree(sources);
+  const inTree = new Set(tree.map(({ element }) => element));
+  const others = sources.filter(({ element }) => !inTree.has(element)).map((edge) => sourceOf(edge, edge.to));
+
+  const hull: Hull = {
+    low: 0,
+    high: 0,
+    bound: boundNodes(size, edges, pinned),
+    pinned,
+    tree,
+    others,
+    potential: new Float64Array(size),
+  };
+  updateHull(hull);
+  return hull;
+}
+
+/** Works the interval out anew after voltages of sources changed. Allocates nothing. */
+export function updateHull(hull: Hull): void {
+  const { tree, others, potential } = hull;
   let low = 0;
   let high = 0;
-  for (let grown = true; grown;) {
-    grown = false;
-    for (const { a, b, voltage, ideal } of sources) {
-      const ofA = known.get(a);
-      const ofB = known.get(b);
-      if (ofA === undefined && ofB !== undefined) known.set(a, ofB + voltage);
-      else if (ofB === undefined && ofA !== undefined) known.set(b, ofA - voltage);
-      else if (!ideal || ofA === undefined || hull.pinned[a] === hull.pinned[b]) continue;
-      if (ideal && (hull.pinned[a] === 1 || hull.pinned[b] === 1)) hull.pinned[a] = hull.pinned[b] = 1;
-      grown = true;
-    }
+  for (let k = 0; k < tree.length; k++) {
+    const source = tree[k];
+    if (!source) continue;
+    const here = at(potential, source.known) + source.sign * at(source.element.values, source.value);
+    potential[source.node] = here;
+    low = Math.min(low, here);
+    high = Math.max(high, here);
   }
-  for (const potential of known.values()) {
-    low = Math.min(low, potential);
-    high = Math.max(high, potential);
-  }
-  // Sources that the reference does not reach through sources, or that close a loop, may add their whole voltage.
+  // Sources that float, or that close a loop, may add their whole voltage at either end.
   let extra = 0;
-  for (const { a, b, voltage } of sources) {
-    const ofA = known.get(a);
-    const ofB = known.get(b);
-    const consistent = ofA !== undefined && ofB !== undefined && ofA - ofB === voltage;
-    if (!consistent) extra += Math.abs(voltage);
+  for (let k = 0; k < others.length; k++) {
+    const source = others[k];
+    if (!source) continue;
+    const voltage = source.sign * at(source.element.values, source.value);
+    const fits = at(potential, source.node) - at(potential, source.known) === voltage;
+    if (!fits) extra += Math.abs(voltage);
   }
   hull.low = low - extra;
   hull.high = high + extra;
+}
 
-  // --- Where a forced or driven current reaches ---
-  hull.bound.fill(1);
-  const loose: number[] = driven.filter((node) => node > 0 && hull.pinned[node] === 0);
-  const neighbours = Array.from({ length: graph.size }, (): number[] => []);
-  for (const [a, b] of [...conducts, ...sources.map(({ a, b }): [number, number] => [a, b])]) {
-    neighbours[a]?.push(b);
-    neighbours[b]?.push(a);
+const sourceOf = ({ element, path, from, to }: Edge, known: number): Source => ({
+  element,
+  value: path.kind === 'source' ? path.voltage : 0,
+  known,
+  node: known === from ? to : from,
+  sign: known === to ? 1 : -1,
+});
+
+function spanningTree(edges: readonly Edge[]): Source[] {
+  const reached = new Set([0]);
+  const tree: Source[] = [];
+  for (let grown = true; grown;) {
+    grown = false;
+    for (const edge of edges) {
+      if (reached.has(edge.from) === reached.has(edge.to)) continue;
+      tree.push(sourceOf(edge, reached.has(edge.from) ? edge.from : edge.to));
+      reached.add(edge.from).add(edge.to);
+      grown = true;
+    }
   }
-  for (let node = loose.pop(); node !== undefined; node = loose.pop()) {
-    if (hull.pinned[node] === 1 || hull.bound[node] === 0) continue;
-    hull.bound[node] = 0;
-    loose.push(...(neighbours[node] ?? []));
+  return tree;
+}
+
+/** Nodes that no forced or driven current reaches except through a pinned node. */
+function boundNodes(size: number, edges: readonly Edge[], pinned: Uint8Array): Uint8Array {
+  const bound = new Uint8Array(size).fill(1);
+  const neighbours = Array.from({ length: size }, (): number[] => []);
+  const waiting: number[] = [];
+  for (const { path, from, to } of edges) {
+    if (path.kind === 'current' || path.kind === 'driven') waiting.push(from, to);
+    else {
+      neighbours[from]?.push(to);
+      neighbours[to]?.push(from);
+    }
   }
-  // An ideal output decides its own potential, rails or not.
-  for (const [a] of drivenIdeal) if (a > 0 && hull.pinned[a] === 0) hull.bound[a] = 0;
+  for (let node = waiting.pop(); node !== undefined; node = waiting.pop()) {
+    if (pinned[node] === 1 || bound[node] === 0) continue;
+    bound[node] = 0;
+    waiting.push(...(neighbours[node] ?? []));
+  }
+  return bound;
 }
