@@ -2,7 +2,8 @@
 import { asDrawn, type Stance } from '../../symbols/placement.ts';
 import { symbolArt, symbolNames } from '../../symbols/index.ts';
 import type { Verdict } from '../readings/readings.ts';
-import { badgeShapes, type BadgeSign } from './badge/badge.ts';
+import { badgeShapes } from './badge/badge.ts';
+import type { BadgeSign } from './badge/sign.ts';
 import { badgeWords } from './badge/words.ts';
 import { boundsOfAll } from './bounds.ts';
 import type { Drawing, Primitive, Role } from './primitives.ts';

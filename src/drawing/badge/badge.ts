@@ -1,31 +1,12 @@
 import { quarterArc } from '../../../symbols/pen.ts';
-import type { Inversion, Verdict } from '../../readings/readings.ts';
 import { boxAt, type Point } from '../boxes.ts';
 import { closed, mapped } from '../paths.ts';
 import type { Primitive, Role } from '../primitives.ts';
 import { dashOutlines, dotCentres, sampled } from './broken.ts';
-import {
-  badgeSize,
-  halfTurn,
-  heavyParts,
-  thinCurves,
-  type BadgeRegion,
-  type Dot,
-  type Family,
-} from './curves.ts';
+import { badgeSize, halfTurn, heavyParts, thinCurves, type Dot } from './curves.ts';
 import { frameStrokes } from './frame.ts';
+import type { BadgeSign } from './sign.ts';
 import { markedInversion } from './words.ts';
-
-export interface BadgeSign {
-  readonly family: Family;
-  readonly region: BadgeRegion;
-  readonly reversed: boolean;
-  /** Strong inversion carries no mark. */
-  readonly inversion?: Inversion;
-  readonly verdict: Verdict;
-  /** Drawn in grey with a line through it: the values have changed since. */
-  readonly stale?: boolean;
-}
 
 const thin = 1.25;
 const heavy = 3.5;

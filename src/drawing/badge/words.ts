@@ -1,5 +1,5 @@
 import type { Inversion } from '../../readings/readings.ts';
-import type { BadgeSign } from './badge.ts';
+import type { BadgeSign } from './sign.ts';
 import { regionWord } from './curves.ts';
 
 /** The inversion that is marked: only of a channel that conducts, and strong is not. */

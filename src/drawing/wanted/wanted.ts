@@ -9,7 +9,7 @@ import type {
 } from '../../readings/readings.ts';
 import { formatQuantity } from '../../values/format.ts';
 import { badgeWords } from '../badge/words.ts';
-import type { BadgeSign } from '../badge/badge.ts';
+import type { BadgeSign } from '../badge/sign.ts';
 import { branchesOf, type Branch, type Run } from '../branches.ts';
 import { lineCurrents, pinCurrentsOf } from '../lineCurrents.ts';
 import type { Scene, ScenePart } from '../scene.ts';

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { badgeShapes, type BadgeSign } from '../../../src/drawing/badge/badge.ts';
+import { badgeShapes } from '../../../src/drawing/badge/badge.ts';
+import type { BadgeSign } from '../../../src/drawing/badge/sign.ts';
 import { badgeSize } from '../../../src/drawing/badge/curves.ts';
 import { badgeWords } from '../../../src/drawing/badge/words.ts';
 import { boundsOf } from '../../../src/drawing/bounds.ts';
