@@ -1,5 +1,6 @@
 import type { ReactElement } from 'react';
-import { badgeShapes, type BadgeSign } from '../drawing/badge/badge.ts';
+import { badgeShapes } from '../drawing/badge/badge.ts';
+import type { BadgeSign } from '../drawing/badge/sign.ts';
 import { badgeSize } from '../drawing/badge/curves.ts';
 import { SmallPicture } from './SmallPicture.tsx';
 
