@@ -35,7 +35,9 @@ export function checkRails(document: StageDocument): readonly Fault[] {
     for (const key of Object.keys(set ?? {})) {
       const [id, of] = splitSetKey(key);
       const name = document.parts[id]?.name;
-      if (of !== 'voltage' || name === undefined || !isRail(id)) continue;
+      // A rail that states a voltage itself was judged above.
+      const judged = document.parts[id]?.values?.voltage !== undefined;
+      if (of !== 'voltage' || name === undefined || judged || !isRail(id)) continue;
       const holder = here.get(name);
       if (holder !== undefined && holder !== id) refuse(['states', state, 'set', key], name, holder, id);
       here.set(name, holder ?? id);

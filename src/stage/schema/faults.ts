@@ -69,6 +69,10 @@ function* faultsOfIssue(issue: Issue, before: Path, root: unknown): Generator<Fa
   switch (issue.code) {
     case 'custom': {
       const fault = (issue.params as IssueParams | undefined)?.fault;
+      if (valueAt(root, path) === undefined && path.length > 0) {
+        yield missingKey(path, fault?.allowed ?? 'a value');
+        return;
+      }
       yield fault === undefined
         ? { code: 'wrong-value', message: issue.message, ...place }
         : { ...place, ...fault, path: place.path };
@@ -109,12 +113,19 @@ const allowedOf = (issue: Issue | undefined): { readonly allowed?: string } => {
   return fault?.allowed === undefined ? {} : { allowed: fault.allowed };
 };
 
+const missingKey = (path: Path, allowed: string): Fault => ({
+  code: 'missing-key',
+  message: `"${String(path.at(-1))}" is missing.`,
+  path: pathText(path),
+  found: describeFound(undefined),
+  allowed,
+});
+
 function ordinaryFault(issue: Issue, path: Path, root: unknown): Fault {
   const found = valueAt(root, path);
   const allowed = issue.message;
   const place = { path: pathText(path), found: describeFound(found), allowed };
-  if (found === undefined)
-    return { code: 'missing-key', message: `"${String(path.at(-1))}" is missing.`, ...place };
+  if (found === undefined) return missingKey(path, allowed);
   if (issue.code === 'invalid_type') {
     return { code: 'wrong-type', message: `Found ${place.found} where ${allowed} belongs.`, ...place };
   }

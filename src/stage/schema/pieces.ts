@@ -15,11 +15,10 @@ const longestName = 60;
 const text = (test: (value: string) => boolean, fault: Omit<Fault, 'found'>) =>
   z.custom<string>().superRefine((value: unknown, context) => {
     if (typeof value === 'string' && test(value)) return;
-    const message = value === undefined ? `This must be stated. ${fault.message}` : fault.message;
     context.addIssue({
       code: 'custom',
-      message,
-      params: { fault: { ...fault, message, found: describeFound(value) } } satisfies IssueParams,
+      message: fault.message,
+      params: { fault: { ...fault, found: describeFound(value) } } satisfies IssueParams,
       continue: false,
     });
   });
