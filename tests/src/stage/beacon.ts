@@ -3,10 +3,7 @@ import { readStageAtOnce } from '../../../src/stage/readStage.ts';
 import type { StageDocument } from '../../../src/stage/schema/stage.ts';
 
 /** The worked example of the stage file's contract, as text, as data free to be spoiled, and as a document. */
-export const beaconText = readFileSync(
-  new URL('./kept/version-1.stage.json', import.meta.url),
-  'utf8',
-);
+export const beaconText = readFileSync(new URL('./kept/version-1.stage.json', import.meta.url), 'utf8');
 
 export type Loose = Record<string, unknown>;
 

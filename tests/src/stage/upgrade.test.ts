@@ -4,8 +4,8 @@ import { upgrade } from '../../../src/stage/upgrade.ts';
 
 /** Steps of versions that never were, to show that steps are taken in turn. */
 const steps = new Map<number, Step>([
-  [1, (file) => ({ ...file, steps: `${String(file.steps ?? '')}1` })],
-  [2, (file) => ({ ...file, steps: `${String(file.steps ?? '')}2` })],
+  [1, (file) => ({ ...file, first: true })],
+  [2, (file) => ({ ...file, second: Object.keys(file) })],
 ]);
 const options = { target: 3, by: steps };
 
@@ -13,7 +13,12 @@ describe('upgrade', () => {
   it('takes an older file through every step in turn', () => {
     expect(upgrade({ format: 'restpoint-stage', version: 1 }, options)).toEqual({
       ok: true,
-      value: { format: 'restpoint-stage', version: 3, steps: '12' },
+      value: {
+        format: 'restpoint-stage',
+        version: 3,
+        first: true,
+        second: ['format', 'version', 'first'],
+      },
     });
     expect(upgrade({ format: 'restpoint-stage', version: 2 }, options)).toMatchObject({
       value: { steps: '2' },
