@@ -1,6 +1,8 @@
 /** Finds places for parts whose neighbours stand already: each the nearest free one to the pins it is wired to. */
+import type { DrawnEnd, DrawnStage } from '../routing/document.ts';
 import { boxesOverlap, type GridBox, type GridPoint } from '../routing/grid.ts';
 import { letteringOf } from '../routing/lettering.ts';
+import { endKey } from '../routing/nets.ts';
 import { reachOf, type StandingPart } from '../routing/shape.ts';
 import type { Net, Unit } from './circuit.ts';
 import { standingOf } from './columns.ts';
@@ -18,6 +20,7 @@ const clear = 1.5;
  * on the document alone.
  */
 export const fitIn = (
+  document: DrawnStage,
   group: readonly Unit[],
   fixed: ReadonlyMap<Unit, Place>,
   heights: ReadonlyMap<Net, number>,
@@ -28,14 +31,20 @@ export const fitIn = (
     [...fixed].map(([unit, place]) => [unit, standUnit(unit, place)]),
   );
   const found = new Map<Unit, Place>();
+  const wires = wiresAt(document);
+  const joints = jointsWithPlaces(document, group);
   const open = new Set(group.filter((unit) => !fixed.has(unit)));
   const taken: GridBox[] = [...standing.values()].flatMap(roomOf);
+  for (const [x, y] of Object.values(document.joints))
+    taken.push(grown({ left: x, right: x, top: y, bottom: y }, 0.5));
   while (open.size > 0) {
-    const links = (unit: Unit): number => neighbourPins(unit, standing).length;
-    const [unit] = [...open].sort((a, b) => links(b) - links(a) || a.rank - b.rank);
+    const links = new Map([...open].map((unit) => [unit, linksOf(unit, wires, joints, standing)]));
+    const count = (unit: Unit): number => links.get(unit)?.length ?? 0;
+    const [unit] = [...open].sort((a, b) => count(b) - count(a) || a.rank - b.rank);
     if (unit === undefined) break;
     open.delete(unit);
-    const place = placeFor(unit, stances.get(unit) ?? { turn: 0, mirror: false }, standing, taken);
+    const stance = stances.get(unit) ?? { turn: 0, mirror: false };
+    const place = placeFor(unit, stance, links.get(unit) ?? [], taken);
     found.set(unit, place);
     const part = standUnit(unit, place);
     standing.set(unit, part);
@@ -72,9 +81,45 @@ interface Link {
   readonly to: GridPoint;
 }
 
-const neighbourPins = (unit: Unit, standing: ReadonlyMap<Unit, StandingPart>): readonly Link[] => {
+/** For each end of a wire, `part.pin` or a joint, the ends that wires join it with. */
+const wiresAt = (document: DrawnStage): ReadonlyMap<string, readonly DrawnEnd[]> => {
+  const wires = new Map<string, DrawnEnd[]>();
+  for (const { ends } of Object.values(document.wires)) {
+    for (const [one, other] of [ends, [ends[1], ends[0]]] as const) {
+      wires.set(endKey(one), [...(wires.get(endKey(one)) ?? []), other]);
+    }
+  }
+  return wires;
+};
+
+/** Joints whose place counts: those of a net on which something stands. */
+const jointsWithPlaces = (document: DrawnStage, group: readonly Unit[]): ReadonlyMap<string, GridPoint> => {
+  const joints = new Map<string, GridPoint>();
+  for (const net of new Set(group.flatMap(({ nets }) => [...nets.values()]))) {
+    for (const joint of net.joints) {
+      const at = document.joints[joint];
+      if (at !== undefined) joints.set(joint, at);
+    }
+  }
+  return joints;
+};
+
+/** Where the wires of a unit lead: what they end on, or what else stands on the net where that has no place yet. */
+const linksOf = (
+  unit: Unit,
+  wires: ReadonlyMap<string, readonly DrawnEnd[]>,
+  joints: ReadonlyMap<string, GridPoint>,
+  standing: ReadonlyMap<Unit, StandingPart>,
+): readonly Link[] => {
+  const byId = new Map([...standing].map(([one, part]) => [one.id, part]));
   const links: Link[] = [];
   for (const [pin, net] of unit.nets) {
+    const direct = (wires.get(endKey([unit.id, pin])) ?? []).flatMap(([id, theirs]) => {
+      const at = theirs === undefined ? joints.get(id) : byId.get(id)?.pins.get(theirs)?.at;
+      return at === undefined ? [] : [{ pin, to: at }];
+    });
+    links.push(...direct);
+    if (direct.length > 0) continue;
     for (const { unit: other, pin: theirs } of net.members) {
       const at = other === unit ? undefined : standing.get(other)?.pins.get(theirs)?.at;
       if (at !== undefined) links.push({ pin, to: at });
@@ -83,13 +128,7 @@ const neighbourPins = (unit: Unit, standing: ReadonlyMap<Unit, StandingPart>): r
   return links;
 };
 
-const placeFor = (
-  unit: Unit,
-  stance: Stance,
-  standing: ReadonlyMap<Unit, StandingPart>,
-  taken: readonly GridBox[],
-): Place => {
-  const links = neighbourPins(unit, standing);
+const placeFor = (unit: Unit, stance: Stance, links: readonly Link[], taken: readonly GridBox[]): Place => {
   const here = standUnit(unit, { at: [0, 0], ...stance });
   const rooms = roomOf(here);
   const bare = [reachOf(here)];

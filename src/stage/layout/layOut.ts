@@ -36,7 +36,7 @@ export const layOut = <Document extends DrawnStage>(document: Document): Documen
   const standing = [...fixed];
   for (const group of groups) {
     if (!group.some((unit) => fixed.has(unit)) || group.every((unit) => fixed.has(unit))) continue;
-    for (const [unit, place] of fitIn(group, new Map(standing), heights, signals)) {
+    for (const [unit, place] of fitIn(document, group, new Map(standing), heights, signals)) {
       places.set(unit, place);
       standing.push([unit, place]);
     }
@@ -44,7 +44,10 @@ export const layOut = <Document extends DrawnStage>(document: Document): Documen
 
   const free = groups.filter((group) => !group.some((unit) => fixed.has(unit)));
   const arranged = free.map((group) => ({ group, ...arrange(document, group, heights, signals) }));
-  const shifts = packed(arranged, boundsOf(standing));
+  const moving = new Set(arranged.flatMap((one) => [...one.joints.keys()]));
+  const staying = Object.entries(document.joints).filter(([joint]) => !moving.has(joint));
+  const dots = staying.map(([, [x, y]]): GridBox => ({ left: x, right: x, top: y, bottom: y }));
+  const shifts = packed(arranged, boundsOf(standing, dots));
   for (const [index, arrangement] of arranged.entries()) {
     const [dx, dy] = shifts[index] ?? [0, 0];
     for (const [unit, place] of arrangement.places)
@@ -57,13 +60,16 @@ export const layOut = <Document extends DrawnStage>(document: Document): Documen
 const without = (part: DrawnPart, ...keys: readonly string[]): DrawnPart =>
   Object.fromEntries(Object.entries(part).filter(([key]) => !keys.includes(key))) as unknown as DrawnPart;
 
-const boundsOf = (standing: Iterable<readonly [Unit, Place]>): GridBox | undefined =>
-  boxAround(
-    [...standing].flatMap(([unit, place]) => {
-      const part = standUnit(unit, place);
-      return [reachOf(part), ...letteringOf(part)];
-    }),
-  );
+const boundsOf = (
+  standing: Iterable<readonly [Unit, Place]>,
+  others: readonly GridBox[],
+): GridBox | undefined => {
+  const boxes = [...standing].flatMap(([unit, place]) => {
+    const part = standUnit(unit, place);
+    return [reachOf(part), ...letteringOf(part)];
+  });
+  return boxAround([...boxes, ...others]);
+};
 
 const placed = <Document extends DrawnStage>(
   document: Document,

@@ -4,7 +4,7 @@ import type { GridBox, GridPoint } from '../routing/grid.ts';
 import { boxesOverlap } from '../routing/grid.ts';
 import { reachOf, standArt, type StandingPart } from '../routing/shape.ts';
 import type { Cell } from './cells.ts';
-import { pinPointing, stepOf, type Net, type Unit } from './circuit.ts';
+import { stepOf, type Net, type Unit } from './circuit.ts';
 import { standsAsDrawn, type Upright } from './columns.ts';
 import type { Flow } from './order.ts';
 import type { Rows } from './rows.ts';
@@ -236,7 +236,3 @@ const mostOften = (values: readonly number[]): number | undefined => {
   for (const value of values) counts.set(value, (counts.get(value) ?? 0) + 1);
   return [...counts].sort((a, b) => b[1] - a[1])[0]?.[0] ?? values[0];
 };
-
-/** The pin of a symbol that stands on one pin. */
-export const onlyPin = (unit: Unit): string =>
-  pinPointing(unit, 1) ?? pinPointing(unit, 3) ?? pinPointing(unit, 2) ?? 'node';

@@ -13,6 +13,8 @@ export const cost = {
   crossing: 70,
   /** Leaving a pin otherwise than in line with its lead. */
   sideways: 25,
+  /** The same at a rail, a ground or a test point, which a trunk often runs through. */
+  sidewaysOfSymbol: 8,
   /** A unit beside another net's line one unit away. */
   crowded: 4,
   /** A grid point right beside a body or a lead. */

@@ -8,6 +8,8 @@ export interface Terminal {
   readonly at: GridPoint;
   /** The way its lead points; null for a joint, which has none. */
   readonly heading: Heading | null;
+  /** What leaving it otherwise than along its lead costs. */
+  readonly sideways: number;
 }
 
 export interface Search {
@@ -50,6 +52,7 @@ export class PathFinder {
   private goalX = 0;
   private goalY = 0;
   private headingIn: Heading | null = null;
+  private sidewaysIn = 0;
   private trespassing = false;
   /** Columns and rows of the field to look at. */
   private lowX = 0;
@@ -87,10 +90,10 @@ export class PathFinder {
   private search(search: Search, start: number, goal: number, fromLines: boolean): Polyline | null {
     const { reached, before, heap } = this;
     this.prepare(search, goal, fromLines);
-    const { heading: lead } = search.from;
+    const { heading: lead, sideways } = search.from;
     const along: number[] = [];
     for (let heading = 0; heading < 4; heading++) {
-      const aside = lead !== null && lead !== heading ? cost.sideways : 0;
+      const aside = lead !== null && lead !== heading ? sideways : 0;
       const entered = this.advance(start, -1, heading, aside, false);
       if (entered >= 0 && fromLines) along.push(entered);
     }
@@ -123,6 +126,7 @@ export class PathFinder {
     this.goalX = to.at[0] - left;
     this.goalY = to.at[1] - top;
     this.headingIn = to.heading;
+    this.sidewaysIn = to.sideways;
     this.trespassing = trespassing ?? false;
     const [fromX, fromY] = [from.at[0] - left, from.at[1] - top];
     this.lowX = Math.max(0, Math.min(fromX, this.goalX) - beyond);
@@ -177,7 +181,7 @@ export class PathFinder {
     // ---- the next point ----
     if (next === this.goal) {
       // Arriving in line with the lead is arriving against its heading.
-      if (this.headingIn !== null && this.headingIn !== (heading ^ 2)) price += cost.sideways;
+      if (this.headingIn !== null && this.headingIn !== (heading ^ 2)) price += this.sidewaysIn;
     } else {
       if (field.solid[next] === 1) return -1;
       const pin = field.pin[next] ?? 0;

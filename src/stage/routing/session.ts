@@ -1,3 +1,4 @@
+import { cost } from './costs.ts';
 import type { DrawnEnd, DrawnStage } from './document.ts';
 import { Field } from './field.ts';
 import { boxAround, lengthOf, tidied, type GridBox, type GridPoint, type Polyline } from './grid.ts';
@@ -36,10 +37,14 @@ export class Session {
     const terminal = ([id, pin]: DrawnEnd): Terminal | undefined => {
       if (pin === undefined) {
         const at = document.joints[id];
-        return at === undefined ? undefined : { at, heading: null };
+        return at === undefined ? undefined : { at, heading: null, sideways: 0 };
       }
-      const found = parts.get(id)?.pins.get(pin);
-      return found === undefined ? undefined : { at: found.at, heading: found.heading };
+      const part = parts.get(id);
+      const found = part?.pins.get(pin);
+      if (part === undefined || found === undefined) return undefined;
+      const { at, heading } = found;
+      const isSymbol = part.pins.size === 1 && (heading === 1 || heading === 3);
+      return { at, heading, sideways: isSymbol ? cost.sidewaysOfSymbol : cost.sideways };
     };
 
     const tasks = new Map<string, Task>();
