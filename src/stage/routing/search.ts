@@ -25,6 +25,46 @@ export interface Search {
   readonly trespassing?: boolean;
 }
 
+/** Work arrays of a search, one entry a state. */
+interface Scratch {
+  /** Cheapest cost known to a state (4·point + heading), valid where `seen` holds the present round. */
+  reached: Int32Array;
+  seen: Int32Array;
+  /** State from which it was reached; −1 at the start. */
+  before: Int32Array;
+  /** Number of the search under way: no two searches have the same. */
+  round: number;
+  readonly heap: Heap;
+}
+
+/**
+ * One set of work arrays for all searches: a search runs from its start to its end at once, and what an earlier one
+ * left is known by its round. Routing again in every frame of a drag then allocates none.
+ */
+const scratch: Scratch = {
+  reached: new Int32Array(0),
+  seen: new Int32Array(0),
+  before: new Int32Array(0),
+  round: 0,
+  heap: new Heap(),
+};
+
+/** Makes room for a field, and begins a new round. */
+const beginRound = (states: number): void => {
+  if (scratch.seen.length < states) {
+    scratch.reached = new Int32Array(states);
+    scratch.seen = new Int32Array(states);
+    scratch.before = new Int32Array(states);
+    scratch.round = 0;
+  }
+  if (scratch.round === 0x7fffffff) {
+    scratch.seen.fill(0);
+    scratch.round = 0;
+  }
+  scratch.round++;
+  scratch.heap.clear();
+};
+
 /**
  * Finds cheapest routes on a field.
  *
@@ -32,17 +72,10 @@ export interface Search {
  * Computers EC-10, 1961), led by a lower bound (Hart, Nilsson and Raphael, 'A Formal Basis for the Heuristic
  * Determination of Minimum Cost Paths', IEEE Trans. SSC-4, 1968), over states of point and heading so that bends
  * have a price. Where the net has lines at one end already, the search sets out from all of them at once, so that a
- * long trunk is not searched again for each wire on it. Work arrays are kept between searches.
+ * long trunk is not searched again for each wire on it.
  */
 export class PathFinder {
   private readonly field: Field;
-  /** Cheapest cost known to a state (4·point + heading), valid where `seen` holds the present round. */
-  private readonly reached: Int32Array;
-  private readonly seen: Int32Array;
-  /** State from which it was reached; −1 at the start. */
-  private readonly before: Int32Array;
-  private readonly heap = new Heap();
-  private round = 0;
   /** States looked at so far, in all searches: the same on every machine, unlike time. */
   effort = 0;
 
@@ -65,10 +98,6 @@ export class PathFinder {
 
   constructor(field: Field) {
     this.field = field;
-    const states = field.width * field.height * 4;
-    this.reached = new Int32Array(states);
-    this.seen = new Int32Array(states);
-    this.before = new Int32Array(states);
   }
 
   /** The route with both ends; null where there is none within reach. */
@@ -88,8 +117,8 @@ export class PathFinder {
   }
 
   private search(search: Search, start: number, goal: number, fromLines: boolean): Polyline | null {
-    const { reached, before, heap } = this;
     this.prepare(search, goal, fromLines);
+    const { reached, before, heap } = scratch;
     const { heading: lead, sideways } = search.from;
     const along: number[] = [];
     for (let heading = 0; heading < 4; heading++) {
@@ -143,8 +172,7 @@ export class PathFinder {
             bottom: lines.bottom - top,
           };
     this.goalToMet = this.toMet(this.goalX, this.goalY);
-    this.round++;
-    this.heap.clear();
+    beginRound(width * height * 4);
   }
 
   /** Steps on from a state: straight (0), or after a turn to the right (1) or left (2). The state entered, or −1. */
@@ -204,12 +232,12 @@ export class PathFinder {
     }
 
     const entered = next * 4 + heading;
-    const { reached, seen, round } = this;
+    const { reached, seen, before, round, heap } = scratch;
     if (seen[entered] === round && (reached[entered] ?? 0) <= price) return -1;
     seen[entered] = round;
     reached[entered] = price;
-    this.before[entered] = state;
-    this.heap.push(price + this.bound(x, y), entered, price);
+    before[entered] = state;
+    heap.push(price + this.bound(x, y), entered, price);
     return entered;
   }
 
