@@ -20,8 +20,9 @@ describe('upgrade', () => {
         second: ['format', 'version', 'first'],
       },
     });
-    expect(upgrade({ format: 'restpoint-stage', version: 2 }, options)).toMatchObject({
-      value: { steps: '2' },
+    expect(upgrade({ format: 'restpoint-stage', version: 2 }, options)).toEqual({
+      ok: true,
+      value: { format: 'restpoint-stage', version: 3, second: ['format', 'version'] },
     });
   });
   it('leaves a file of the present version as it is', () => {
