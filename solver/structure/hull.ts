@@ -63,9 +63,7 @@ export function updateHull(hull: Hull): void {
   const { tree, others, potential } = hull;
   let low = 0;
   let high = 0;
-  for (let k = 0; k < tree.length; k++) {
-    const source = tree[k];
-    if (!source) continue;
+  for (const source of tree) {
     const here = at(potential, source.known) + source.sign * at(source.element.values, source.value);
     potential[source.node] = here;
     low = Math.min(low, here);
@@ -73,9 +71,7 @@ export function updateHull(hull: Hull): void {
   }
   // Sources that float, or that close a loop, may add their whole voltage at either end.
   let extra = 0;
-  for (let k = 0; k < others.length; k++) {
-    const source = others[k];
-    if (!source) continue;
+  for (const source of others) {
     const voltage = source.sign * at(source.element.values, source.value);
     const fits = at(potential, source.node) - at(potential, source.known) === voltage;
     if (!fits) extra += Math.abs(voltage);
