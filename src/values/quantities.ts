@@ -1,6 +1,6 @@
 /**
  * The quantities a value can be of: unit, symbol, and the range that is allowed, in SI base units
- * (temperatures in °C). Ranges named in README.md's account of the stage file are the file's contract.
+ * (temperatures in °C). The ranges that src/stage/stage-file.md names are the file's contract.
  */
 export interface Quantity {
   /** The quantity's own unit as it is written; empty for a pure number. */
