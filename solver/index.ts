@@ -51,7 +51,7 @@ export {
 // --- Settling ---
 export { prepare, type Preparation } from './settle/prepare.ts';
 export type { Prepared } from './settle/prepared.ts';
-export type { Surroundings } from './settle/refresh.ts';
+export type { Surroundings } from './settle/surroundings.ts';
 export { resettle } from './settle/resettle.ts';
 export { settle } from './settle/settle.ts';
 export type {

@@ -16,6 +16,7 @@ export const capacitorLaw: ElementLaw<TwoTerminalOperating> = {
   branches: [],
   pattern: [],
   senses: [],
+  linear: true,
   derivedSize: 0,
   memorySize: 0,
   paths: () => [],

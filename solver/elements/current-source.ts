@@ -16,6 +16,7 @@ export const currentSourceLaw: ElementLaw<SourceOperating> = {
   branches: [],
   pattern: [],
   senses: [],
+  linear: true,
   derivedSize: 1,
   memorySize: 0,
   paths: () => [{ kind: 'current', from: 0, to: 1 }],

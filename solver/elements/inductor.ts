@@ -20,6 +20,7 @@ export const inductorLaw: ElementLaw<TwoTerminalOperating> = {
   branches: ['current'],
   pattern: branchPattern,
   senses: [],
+  linear: true,
   derivedSize: 1,
   memorySize: 0,
   paths: () => [{ kind: 'passive', from: 0, to: 1 }],

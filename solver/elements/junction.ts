@@ -90,6 +90,12 @@ export const junctionResult = new Float64Array(2);
 export function evaluateJunction(derived: Float64Array, at: number, v: number): void {
   const saturationCurrent = derived[at + IS]!;
   const scale = derived[at + NUT]!;
+  if (v === 0) {
+    // A body tied to its source, as most are.
+    junctionResult[0] = 0;
+    junctionResult[1] = saturationCurrent / (scale + saturationCurrent * derived[at + RS]!);
+    return;
+  }
   if (v >= derived[at + TANGENT_VOLTAGE]!) {
     junctionResult[0] =
       derived[at + TANGENT_CURRENT]! + (v - derived[at + TANGENT_VOLTAGE]!) / JUNCTION_GUARD_RESISTANCE;

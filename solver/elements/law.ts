@@ -31,6 +31,8 @@ export interface ElementLaw<Operating = unknown> {
    * gains a lag on that output. Absent where there is none.
    */
   readonly lags?: readonly LocalEntry[];
+  /** True where the Jacobian depends on `derived` alone; `load` may then leave it when `linearKnown` is set. */
+  readonly linear?: boolean;
   /** Places in `Workspace.derived`: what `derive` works out once per settle. */
   readonly derivedSize: number;
   /** Places in `Workspace.memory`: what limiting remembers from one evaluation to the next. */
@@ -127,6 +129,8 @@ export interface Workspace {
   readonly derived: Float64Array;
   readonly memory: Float64Array;
   phase: Phase;
+  /** Set where the Jacobian entries of linear laws stand from an earlier load. */
+  linearKnown: boolean;
   /** Set by a law that evaluated elsewhere than at `x`. */
   limited: boolean;
   /** Factor on every independent source: 1, save while sources are ramped. */

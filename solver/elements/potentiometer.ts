@@ -47,6 +47,7 @@ export const potentiometerLaw: ElementLaw<PotentiometerOperating> = {
     [4, 4],
   ],
   senses: [],
+  linear: true,
   derivedSize: 2,
   memorySize: 0,
   paths: () => [
@@ -58,7 +59,7 @@ export const potentiometerLaw: ElementLaw<PotentiometerOperating> = {
     derived[at] = Math.max(resistance * values[1]!, RESISTANCE_FLOOR);
     derived[at + 1] = Math.max(resistance * (1 - values[1]!), RESISTANCE_FLOOR);
   },
-  load({ x, residual, jacobian, derived }, batch) {
+  load({ x, residual, jacobian, derived, linearKnown }, batch) {
     let { unknown: u, slot: s, derived: d } = batch;
     for (let k = 0; k < batch.count; k++, u += 5, s += 10, d += 2) {
       const fromA = x[u + 3]!;
@@ -68,6 +69,7 @@ export const potentiometerLaw: ElementLaw<PotentiometerOperating> = {
       residual[u + 2] = toB - fromA;
       residual[u + 3] = x[u]! - x[u + 2]! - derived[d]! * fromA;
       residual[u + 4] = x[u + 2]! - x[u + 1]! - derived[d + 1]! * toB;
+      if (linearKnown) continue;
       jacobian[s] = jacobian[s + 2] = jacobian[s + 4] = jacobian[s + 7] = 1;
       jacobian[s + 1] = jacobian[s + 3] = jacobian[s + 5] = jacobian[s + 8] = -1;
       jacobian[s + 6] = -derived[d]!;

@@ -25,6 +25,7 @@ const common = {
   internals: [],
   senses: [],
   derivedSize: 1,
+  linear: true,
   memorySize: 0,
   paths: () => [{ kind: 'passive', from: 0, to: 1 }],
   read: readTwoTerminal,
@@ -37,12 +38,13 @@ export const resistorLaw: ElementLaw<TwoTerminalOperating> = {
   derive(values, conditions, derived, at) {
     derived[at] = 1 / resistanceAt(values, conditions); // S
   },
-  load({ x, residual, jacobian, derived }, { count, unknown, slot, derived: d }) {
+  load({ x, residual, jacobian, derived, linearKnown }, { count, unknown, slot, derived: d }) {
     for (let k = 0, u = unknown, s = slot; k < count; k++, u += 2, s += 4) {
       const conductance = derived[d + k]!;
       const current = conductance * (x[u]! - x[u + 1]!);
       residual[u] = current;
       residual[u + 1] = -current;
+      if (linearKnown) continue;
       jacobian[s] = jacobian[s + 3] = conductance;
       jacobian[s + 1] = jacobian[s + 2] = -conductance;
     }

@@ -29,6 +29,7 @@ export const voltageSourceLaw: ElementLaw<SourceOperating> = {
     [2, 2],
   ],
   senses: [],
+  linear: true,
   derivedSize: 2,
   memorySize: 0,
   paths: (values) => [{ kind: 'source', from: 0, to: 1, voltage: 0, ideal: !(values[1]! > 0) }],
@@ -37,7 +38,7 @@ export const voltageSourceLaw: ElementLaw<SourceOperating> = {
     derived[at] = values[0]!;
     derived[at + 1] = values[1]!;
   },
-  load({ x, residual, jacobian, derived, sourceScale }, batch) {
+  load({ x, residual, jacobian, derived, sourceScale, linearKnown }, batch) {
     let { unknown: u, slot: s, derived: d } = batch;
     for (let k = 0; k < batch.count; k++, u += 3, s += 5, d += 2) {
       const resistance = derived[d + 1]!;
@@ -45,6 +46,7 @@ export const voltageSourceLaw: ElementLaw<SourceOperating> = {
       residual[u] = current;
       residual[u + 1] = -current;
       residual[u + 2] = x[u]! - x[u + 1]! - sourceScale * derived[d]! - resistance * current;
+      if (linearKnown) continue;
       jacobian[s] = jacobian[s + 2] = 1;
       jacobian[s + 1] = jacobian[s + 3] = -1;
       jacobian[s + 4] = -resistance;

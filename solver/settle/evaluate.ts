@@ -9,6 +9,10 @@ export function loadElements(prepared: Prepared): void {
   for (let k = 0; k < local.length; k++) local[k] = at(x, indexAt(gather, k));
   work.limited = false;
   for (const { law, batch } of batches) law.load(work, batch);
+  if (work.linearKnown) return;
+  prepared.linearMatrix.fill(0);
+  addEntries(prepared, prepared.linearMatrix, 0, prepared.linearEntries);
+  work.linearKnown = true;
 }
 
 /** Sums the elements' currents and branch voltages into `residual`. */
@@ -22,11 +26,15 @@ export function assembleResidual({ work, gather, residual }: Prepared): void {
 }
 
 /** Sums the elements' derivatives into the matrix. */
-export function assembleMatrix({ work, slots, system }: Prepared): void {
-  const { values } = system;
-  values.fill(0);
+export function assembleMatrix(prepared: Prepared): void {
+  const { work, system, linearMatrix, linearEntries } = prepared;
+  system.values.set(linearMatrix);
+  addEntries(prepared, system.values, linearEntries, work.jacobian.length);
+}
+
+function addEntries({ work, slots }: Prepared, values: Float64Array, from: number, to: number): void {
   const local = work.jacobian;
-  for (let k = 0; k < local.length; k++) {
+  for (let k = from; k < to; k++) {
     const slot = indexAt(slots, k);
     values[slot] = at(values, slot) + at(local, k);
   }
@@ -34,7 +42,7 @@ export function assembleMatrix({ work, slots, system }: Prepared): void {
 
 /** Sums what the rows' bounds of acceptance are made of; on the accepting evaluation only. */
 export function assembleMagnitudes(prepared: Prepared): void {
-  const { work, gather, x, magnitude, rounding, entryRows, entryColumns } = prepared;
+  const { work, gather, x, magnitude, rounding, entryRows, entryColumns, inner } = prepared;
   magnitude.fill(0);
   rounding.fill(0);
   const { residual, jacobian } = work;
@@ -42,6 +50,10 @@ export function assembleMagnitudes(prepared: Prepared): void {
     const row = indexAt(gather, k);
     magnitude[row] = at(magnitude, row) + Math.abs(at(residual, k));
   }
+  // An internal node is its element's alone, whose sum there is nothing but what is left over: what flows is what
+  // comes through from the terminal, and goes on.
+  for (const { row, node, terminal, entry } of inner)
+    magnitude[row] = 2 * Math.abs(at(jacobian, entry) * (at(work.x, node) - at(work.x, terminal)));
   for (let k = 0; k < jacobian.length; k++) {
     const row = indexAt(entryRows, k);
     rounding[row] = at(rounding, row) + Math.abs(at(jacobian, k) * at(x, indexAt(entryColumns, k)));

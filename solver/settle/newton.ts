@@ -35,19 +35,25 @@ export interface NewtonRun {
   singularAt: number;
 }
 
-/** Iterates from the point at hand until every row holds and the last step was small. */
+/** By how much a step on the way of another method may be larger than the last step of all. */
+const LOOSE = 1000;
+/** A step this many times larger than the last of all, about 1 mV, has come close enough to look at the rows. */
+const CLOSE = 1e6;
+
+/** Iterates from the point at hand until every row holds and the step is small. */
 export function newton(prepared: Prepared, run: NewtonRun): NewtonOutcome {
-  const { work, residual, system, size } = prepared;
+  const { work, system } = prepared;
+  const enough = run.by === 'rows' ? 1 : LOOSE;
   work.phase = run.first;
-  let settledStep = false;
+  let size = Infinity; // of the last step, in units of the last step allowed
   for (let iteration = 0; ; iteration++) {
     loadElements(prepared);
     assembleResidual(prepared);
     if (run.shunt) addShunt(prepared, run.shunt, false);
-    if (settledStep && !work.limited) {
-      if (run.by === 'step') return 'accepted';
-      measureRows(prepared, run.residual);
-      if (run.residual.ratio <= 1) return 'accepted';
+    if (size <= CLOSE && !work.limited && rowsHold(prepared, run)) {
+      if (size <= enough) return 'accepted';
+      // The step from here, by the factors at hand: near enough to tell whether it would be small.
+      if (solveStep(prepared, run) && stepSize(prepared) <= enough) return 'accepted';
     }
     if (iteration >= run.maxIterations) return 'iterations';
     assembleMatrix(prepared);
@@ -57,40 +63,76 @@ export function newton(prepared: Prepared, run: NewtonRun): NewtonOutcome {
       run.singularAt = status.column;
       return 'singular';
     }
-    for (let row = 0; row < size; row++) residual[row] = -at(residual, row);
-    const solved = system.solve(residual);
-    if (solved.kind === 'singular' || solved.kind === 'not-finite') {
-      run.singularAt = solved.column;
-      return 'singular';
-    }
+    if (!solveStep(prepared, run)) return 'singular';
     run.iterations++;
-    settledStep = takeStep(prepared, run.by === 'rows' ? 1 : LOOSE) && !work.limited;
+    size = work.limited ? Infinity : stepSize(prepared);
+    takeStep(prepared);
     work.phase = Phase.limit;
   }
 }
 
-/** By how much a step on the way of another method may be larger than the last step of all. */
-const LOOSE = 1000;
+/** One more whole step from an accepted point, kept where the rows hold better for it: the digits are worth it. */
+export function polish(prepared: Prepared, run: NewtonRun): void {
+  const { work, system, x, step, size } = prepared;
+  const before = run.residual.ratio;
+  const { amperes } = run.residual;
+  work.phase = Phase.exact;
+  assembleMatrix(prepared);
+  const { kind } = system.factorise();
+  if (kind === 'singular' || kind === 'not-finite' || !solveStep(prepared, run)) return;
+  for (let k = 0; k < size; k++) x[k] = at(x, k) + at(step, k);
+  loadElements(prepared);
+  assembleResidual(prepared);
+  measureRows(prepared, run.residual);
+  if (run.residual.ratio <= before) return;
+  for (let k = 0; k < size; k++) x[k] = at(x, k) - at(step, k);
+  loadElements(prepared);
+  assembleResidual(prepared);
+  run.residual.ratio = before;
+  run.residual.amperes = amperes;
+}
 
-/** Moves the unknowns by the step in `residual`, limited. True where the whole step was small. */
-function takeStep({ x, residual, size, kinds, hull }: Prepared, loose: number): boolean {
-  let small = true;
+function rowsHold(prepared: Prepared, { by, residual }: NewtonRun): boolean {
+  if (by === 'step') return true;
+  measureRows(prepared, residual);
+  return residual.ratio <= 1;
+}
+
+/** Solves for the step with the factors at hand; false where they turn out to be none. */
+function solveStep({ residual, step, size, system }: Prepared, run: NewtonRun): boolean {
+  for (let row = 0; row < size; row++) step[row] = -at(residual, row);
+  const status = system.solve(step);
+  if (status.kind !== 'singular' && status.kind !== 'not-finite') return true;
+  run.singularAt = status.column;
+  return false;
+}
+
+/** The whole step's largest part, in units of 1e-9 of the unknown + 1e-9 V (+ 1e-12 A for branches). */
+function stepSize({ x, step, size, kinds }: Prepared): number {
+  let largest = 0;
+  for (let k = 0; k < size; k++) {
+    const floor = codeAt(kinds, k) === UnknownKind.branch ? STEP_FLOOR_AMPERES : STEP_FLOOR_VOLTS;
+    const part = Math.abs(at(step, k)) / (STEP_PART * Math.abs(at(x, k)) + floor);
+    if (Number.isNaN(part)) return Infinity;
+    if (part > largest) largest = part;
+  }
+  return largest;
+}
+
+/** Moves the unknowns by the step, limited. */
+function takeStep({ x, step, size, kinds, hull }: Prepared): void {
   for (let k = 0; k < size; k++) {
     const from = at(x, k);
+    const wanted = at(step, k);
     const kind = codeAt(kinds, k);
-    const floor = kind === UnknownKind.branch ? STEP_FLOOR_AMPERES : STEP_FLOOR_VOLTS;
-    let step = at(residual, k);
-    if (!(Math.abs(step) <= loose * (STEP_PART * Math.abs(from) + floor))) small = false;
     if (kind === UnknownKind.bound) {
-      step = Math.min(Math.max(step, -NODE_STEP), NODE_STEP);
-      step = Math.min(Math.max(from + step, hull.low), hull.high) - from;
+      const to = from + Math.min(Math.max(wanted, -NODE_STEP), NODE_STEP);
+      x[k] = Math.min(Math.max(to, hull.low), hull.high);
     } else if (kind === UnknownKind.loose) {
       const cap = Math.max(NODE_STEP, Math.abs(from));
-      step = Math.min(Math.max(step, -cap), cap);
-    }
-    x[k] = from + step;
+      x[k] = from + Math.min(Math.max(wanted, -cap), cap);
+    } else x[k] = from + wanted;
   }
-  return small;
 }
 
 /** Adds the shunt to the free nodes' rows, or to their diagonals. */

@@ -33,6 +33,16 @@ export interface ElementPlace {
   readonly isSource: boolean;
 }
 
+/** An internal node and the conductance by which it stands behind a terminal. */
+export interface InnerNode {
+  readonly row: number;
+  /** Places in `work.x`. */
+  readonly node: number;
+  readonly terminal: number;
+  /** Place in `work.jacobian` of the derivative of the node's row against the terminal. */
+  readonly entry: number;
+}
+
 /**
  * Unknowns: voltages of nodes 1 … , then each element's internal nodes (V) and branch currents (A). The last place
  * of `x` and `residual` is the reference node.
@@ -54,6 +64,9 @@ export interface Prepared {
   readonly gather: Int32Array;
   /** Slot of each of the elements' local Jacobian entries; length of `work.jacobian`. */
   readonly slots: Int32Array;
+  /** The first of them, which belong to linear laws, and the matrix these make by themselves. */
+  readonly linearEntries: number;
+  readonly linearMatrix: Float64Array;
   /** Row (unknown) and column (unknown) of each of those entries. */
   readonly entryRows: Int32Array;
   readonly entryColumns: Int32Array;
@@ -61,14 +74,18 @@ export interface Prepared {
   readonly diagonal: Int32Array;
   /** Outputs with a pole of their own: branch row, output and the slot where they meet. */
   readonly lags: readonly { readonly row: number; readonly output: number; readonly slot: number }[];
+  /** Internal nodes: row, its element's local places of node and terminal, and the entry that joins the two. */
+  readonly inner: readonly InnerNode[];
 
   // --- The point at hand ---
   readonly system: LinearSystem;
   readonly work: Workspace;
   /** Unknowns, V and A; length `size + 1`. */
   readonly x: Float64Array;
-  /** Sum of each row, then in place the step that mends it; length `size + 1`. */
+  /** Sum of each row, A for nodes, V for branches; length `size + 1`. */
   readonly residual: Float64Array;
+  /** The step that mends it, V for nodes, A for branches; length `size + 1`. */
+  readonly step: Float64Array;
   /** Sum of magnitudes of the currents in each row (A), and of |G|·|V| (A, or V for branches); length `size + 1`. */
   readonly magnitude: Float64Array;
   readonly rounding: Float64Array;
@@ -94,6 +111,9 @@ export function layOut(circuit: Circuit): Prepared {
     if (group) group.push({ element, index });
     else byLaw.set(element.law, [{ element, index }]);
   });
+  // Linear laws first, so that their share of the matrix is one stretch of entries.
+  const isLinear = (law: ElementLaw) => law.linear ?? false;
+  const groups = [...byLaw].sort(([a], [b]) => Number(isLinear(b)) - Number(isLinear(a)));
 
   const places: ElementPlace[] = [];
   const batches: { law: ElementLaw; batch: Batch }[] = [];
@@ -101,11 +121,13 @@ export function layOut(circuit: Circuit): Prepared {
   const entryRows: number[] = [];
   const entryColumns: number[] = [];
   const lagging: EntryPlace[] = [];
+  const inner: InnerNode[] = [];
   let derived = 0;
   let memory = 0;
   let value = 0;
   // The reference's place, size, is only known at the end; −1 stands in.
-  for (const [law, group] of byLaw) {
+  let linearEntries = 0;
+  for (const [law, group] of groups) {
     batches.push({
       law,
       batch: { count: group.length, unknown: gather.length, slot: entryRows.length, derived, memory },
@@ -125,12 +147,23 @@ export function layOut(circuit: Circuit): Prepared {
       const local = element.nodes.map((node) => node - 1);
       for (const name of law.internals) local.push(addUnknown(`${element.name}.${name}`, 0));
       for (const name of law.branches) local.push(addUnknown(`${element.name}.${name}`, 1));
+      (law.behind ?? []).forEach((terminal, k) => {
+        const node = law.terminals.length + k;
+        const joining = law.pattern.findIndex(([row, column]) => row === node && column === terminal);
+        inner.push({
+          row: local[node] ?? -1,
+          node: gather.length + node,
+          terminal: gather.length + terminal,
+          entry: entryRows.length + joining,
+        });
+      });
       gather.push(...local);
       for (const [row, column] of law.pattern) {
         entryRows.push(local[row] ?? -1);
         entryColumns.push(local[column] ?? -1);
       }
       for (const [row, column] of law.lags ?? []) lagging.push([local[row] ?? -1, local[column] ?? -1]);
+      if (isLinear(law)) linearEntries = entryRows.length;
       derived += law.derivedSize;
       memory += law.memorySize;
       value += element.values.length;
@@ -162,6 +195,8 @@ export function layOut(circuit: Circuit): Prepared {
     batches,
     gather: Int32Array.from(gather, orReference),
     slots: Int32Array.from(entries, ([row, column]) => pattern.slotOf(row, column)),
+    linearEntries,
+    linearMatrix: new Float64Array(pattern.entryCount + 1),
     entryRows: Int32Array.from(entryRows, orReference),
     entryColumns: Int32Array.from(entryColumns, orReference),
     diagonal: Int32Array.from(rowKinds, (kind, row) =>
@@ -170,6 +205,7 @@ export function layOut(circuit: Circuit): Prepared {
     lags: lagging.flatMap(([row, output]) =>
       output < 0 ? [] : [{ row, output, slot: pattern.slotOf(row, output) }],
     ),
+    inner,
     system,
     work: {
       x: new Float64Array(gather.length),
@@ -178,12 +214,14 @@ export function layOut(circuit: Circuit): Prepared {
       derived: new Float64Array(derived),
       memory: new Float64Array(memory),
       phase: Phase.exact,
+      linearKnown: false,
       limited: false,
       sourceScale: 1,
       gainScale: 1,
     },
     x: new Float64Array(size + 1),
     residual: new Float64Array(size + 1),
+    step: new Float64Array(size + 1),
     magnitude: new Float64Array(size + 1),
     rounding: new Float64Array(size + 1),
     hull: findHull(circuit),

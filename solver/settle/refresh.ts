@@ -3,14 +3,8 @@ import type { Element } from '../circuit.ts';
 import { at } from '../elements/at.ts';
 import { DECLARED_LEAK } from '../elements/constants.ts';
 import { findHull, updateHull } from '../structure/hull.ts';
+import type { Surroundings } from './surroundings.ts';
 import { updateKinds, type Prepared } from './prepared.ts';
-
-export interface Surroundings {
-  /** Of every element, K. */
-  readonly temperature: number;
-  /** Of each element, K, in the order of the circuit's elements; in place of `temperature`. */
-  readonly temperatures?: Float64Array;
-}
 
 /** Part of the declared leak by element. */
 export type LeakScale = (element: number) => number;
@@ -26,7 +20,7 @@ export const hundredthLeak: LeakScale = (element) => 0.01 * (0.5 + ((element * 0
 /** Brings `derived`, hull and kinds up to date. Returns an element whose values give no number, if there is one. */
 export function refresh(
   prepared: Prepared,
-  { temperature: everywhere, temperatures }: Surroundings,
+  { temperature: everywhere, temperatures, leak: wholeOf = DECLARED_LEAK }: Surroundings,
   leakScale: LeakScale,
 ): Element | null {
   const { places, work, seenValues, seenTemperatures, seenLeaks } = prepared;
@@ -38,7 +32,7 @@ export function refresh(
     const { element, value } = place;
     const { values, law } = element;
     const temperature = temperatures ? at(temperatures, e) : everywhere;
-    const leak = DECLARED_LEAK * leakScale(e);
+    const leak = wholeOf * leakScale(e);
     let same = temperature === at(seenTemperatures, e) && leak === at(seenLeaks, e);
     for (let k = 0; k < values.length; k++) {
       const present = at(values, k);
@@ -49,6 +43,7 @@ export function refresh(
       if (place.isSource) voltagesChanged = true;
     }
     if (same) continue;
+    work.linearKnown = false;
     seenTemperatures[e] = temperature;
     seenLeaks[e] = leak;
     law.derive(values, { temperature, leak }, work.derived, place.derived);

@@ -3,7 +3,8 @@ import { Phase } from '../elements/law.ts';
 import { DIRECT_BUDGET } from './limits.ts';
 import { newton, type NewtonRun } from './newton.ts';
 import type { Prepared } from './prepared.ts';
-import { refresh, wholeLeak, type Surroundings } from './refresh.ts';
+import { refresh, wholeLeak } from './refresh.ts';
+import type { Surroundings } from './surroundings.ts';
 
 const run: NewtonRun = {
   first: Phase.adopt,

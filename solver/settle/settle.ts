@@ -4,7 +4,7 @@ import { Phase } from '../elements/law.ts';
 import { list } from '../structure/list.ts';
 import type { Effort } from './effort.ts';
 import { DIRECT_BUDGET, GREATEST_CURRENT, HULL_MARGIN, OTHER_BUDGET, TIME_BUDGET } from './limits.ts';
-import { newton } from './newton.ts';
+import { newton, polish } from './newton.ts';
 import type { Prepared } from './prepared.ts';
 import { settleRamped } from './ramped.ts';
 import { refresh, wholeLeak } from './refresh.ts';
@@ -51,7 +51,9 @@ export function settle(prepared: Prepared, options: SettleOptions): SettleResult
     const found = ways[method](prepared, effort);
     if (options.signal?.aborted)
       return unsettled(run.iterations, { reason: 'cancelled', message: 'settling was cancelled' });
-    if (found) return beyondSense(prepared, run.iterations) ?? settlementOf(prepared, options, method, run);
+    if (!found) continue;
+    polish(prepared, run);
+    return beyondSense(prepared, run.iterations) ?? settlementOf(prepared, options, method, run);
   }
   return nothingFound(prepared, effort);
 }
@@ -102,7 +104,7 @@ function nothingFound(prepared: Prepared, { run, ranAway }: Effort): Unsettled {
   // The node that moved most at the end is where to look.
   let worst = 0;
   for (let k = 1; k < prepared.size; k++)
-    if (Math.abs(at(prepared.residual, k)) > Math.abs(at(prepared.residual, worst))) worst = k;
+    if (Math.abs(at(prepared.step, k)) > Math.abs(at(prepared.step, worst))) worst = k;
   const { nodes, elements } = named(prepared, worst);
   return unsettled(iterations, {
     reason: 'budget',

@@ -1,5 +1,6 @@
 /** What preparing and settling give back, as values. SI units; node 0 is the reference. */
 import type { Element } from '../circuit.ts';
+import type { Surroundings } from './surroundings.ts';
 
 /**
  * How the point was reached: Newton alone; by a pseudo-transient; with the sources ramped; by arc-length
@@ -63,11 +64,7 @@ export interface Unsettled {
 
 export type SettleResult = Settlement | Unsettled;
 
-export interface SettleOptions {
-  /** Of every element, K. */
-  readonly temperature: number;
-  /** Of each element, K, in the order of the circuit's elements; in place of `temperature`. */
-  readonly temperatures?: Float64Array;
+export interface SettleOptions extends Surroundings {
   /** `state` of an earlier settlement of the same prepared circuit: a warm start. */
   readonly start?: Float64Array;
   /** Most iterations of each method; `direct` alone where `methods` says so. */

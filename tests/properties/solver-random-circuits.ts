@@ -34,6 +34,8 @@ export interface RandomCircuitOptions {
   readonly mosfets?: number;
   /** Bipolar transistors, amplifiers and current sources too; false. */
   readonly mixed?: boolean;
+  /** MOSFETs with series resistances among them; true. */
+  readonly series?: boolean;
 }
 
 /** The circuit of a seed. The same seed and options always give the same circuit. */
@@ -44,7 +46,10 @@ export function randomCircuit(seed: number, options: RandomCircuitOptions): Circ
   }
 }
 
-function draw(random: () => number, { law, mosfets = 12, mixed = false }: RandomCircuitOptions): Circuit {
+function draw(
+  random: () => number,
+  { law, mosfets = 12, mixed = false, series = true }: RandomCircuitOptions,
+): Circuit {
   const whole = (low: number, high: number) => low + Math.floor(random() * (high - low + 1));
   const spread = (low: number, high: number) => low * (high / low) ** random(); // log-uniform
   const chance = (probability: number) => random() < probability;
@@ -76,8 +81,8 @@ function draw(random: () => number, { law, mosfets = 12, mixed = false }: Random
         bodyFactor: chance(0.5) ? random() : 0,
         surfacePotential: 0.5 + 0.5 * random(),
         slopeFactor: 1.1 + 0.5 * random(),
-        drainResistance: chance(0.2) ? spread(1e-2, 10) : 0,
-        sourceResistance: chance(0.2) ? spread(1e-2, 10) : 0,
+        drainResistance: chance(0.2) && series ? spread(1e-2, 10) : 0,
+        sourceResistance: chance(0.2) && series ? spread(1e-2, 10) : 0,
         bodyDiode: { saturationCurrent: spread(1e-15, 1e-9), emissionCoefficient: 1 + random() },
       }),
     );

@@ -26,6 +26,7 @@ export function evaluateElement(
     derived: new Float64Array(law.derivedSize),
     memory: new Float64Array(law.memorySize),
     phase: Phase.exact,
+    linearKnown: false,
     limited: false,
     sourceScale: 1,
     gainScale: 1,
