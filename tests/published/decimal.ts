@@ -4,7 +4,13 @@
  */
 import { all, create, type BigNumber } from 'mathjs';
 
-export const decimal = create(all ?? {}, { number: 'BigNumber', precision: 64 });
+export const decimal = create(all ?? {}, {
+  number: 'BigNumber',
+  precision: 64,
+  // By default what lies below 1e-15 counts as zero in comparisons, pivots included, whatever the precision.
+  relTol: 1e-60,
+  absTol: 1e-60,
+});
 
 export type Decimal = BigNumber;
 
