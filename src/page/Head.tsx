@@ -1,5 +1,5 @@
 import type { ReactElement, ReactNode } from 'react';
-import { Choice } from './Choice.tsx';
+import { Choice } from '../controls/Choice.tsx';
 import { chooseTheme, themeChoices, useThemeChoice } from './theme.ts';
 
 /** The bar along the top: the stage's title, what belongs to the stage, and the choice of theme. */

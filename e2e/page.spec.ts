@@ -1,14 +1,15 @@
 import { AxeBuilder } from '@axe-core/playwright';
 import { expect, test } from './page.ts';
+import { inkBox, inkOf, isPainted } from './ink.ts';
 
 test('the page opens on the first example with its readings', async ({ page }) => {
   await expect(page.getByRole('heading', { level: 1 })).toHaveText('Echo preamplifier, gauge 14');
-  await expect(page.getByTestId('plate').locator('svg')).toBeVisible();
-  await expect(page.getByTestId('plate')).toContainText('saturation');
+  await expect(page.locator('#sheet canvas')).toHaveCount(3);
+  await expect(page.getByRole('complementary', { name: 'ledger' })).toContainText('saturation');
   await expect(page.getByText(/settled in \d+ steps?/)).toBeVisible();
 });
 
-test('every example can be chosen and shows its own plate and readings', async ({ page }) => {
+test('every example can be chosen and shows its own readings', async ({ page }) => {
   const links = page.getByRole('navigation', { name: 'examples' }).getByRole('link');
   const titles = await links.allTextContents();
   expect(titles.length).toBeGreaterThanOrEqual(10);
@@ -16,18 +17,19 @@ test('every example can be chosen and shows its own plate and readings', async (
     await links.filter({ hasText: new RegExp(`^${title}$`) }).click();
     await expect(page.getByRole('heading', { level: 1 })).toHaveText(title);
     await expect(page.getByText(/settled in \d+ steps?/)).toBeVisible();
-    await expect(page.getByTestId('plate').locator('svg')).toContainText(title);
+    await expect(page.getByRole('table', { name: new RegExp(`^Readings of ${title}`) })).toBeAttached();
+    expect(await isPainted(page)).toBe(true);
   }
 });
 
 test('the state of the equipment changes the readings', async ({ page }) => {
   await page.goto('#battery-polarity');
-  const plate = page.getByTestId('plate');
-  await expect(plate).toContainText('triode');
+  const ledger = page.getByRole('complementary', { name: 'ledger' });
+  await expect(ledger).toContainText('triode');
   await page.getByRole('radio', { name: 'reversed' }).check();
-  await expect(plate).toContainText('cutoff');
+  await expect(ledger).toContainText('cutoff');
   await page.getByRole('radio', { name: 'right' }).check();
-  await expect(plate).toContainText('triode');
+  await expect(ledger).toContainText('triode');
 });
 
 test('the same figures stand in a table for a screen reader', async ({ page }) => {
@@ -54,15 +56,15 @@ test('the theme follows the system until a person chooses one, and the choice is
   const ground = () => page.evaluate(() => getComputedStyle(document.documentElement).backgroundColor);
   await page.emulateMedia({ colorScheme: 'light' });
   const light = await ground();
-  const plate = page.getByTestId('plate');
-  const lightPlate = await plate.innerHTML();
+  await expect.poll(() => isPainted(page)).toBe(true);
+  const lightInk = await inkOf(page);
   await page.emulateMedia({ colorScheme: 'dark' });
   await expect.poll(ground).not.toBe(light);
-  await expect.poll(() => plate.innerHTML()).not.toBe(lightPlate);
+  await expect.poll(() => inkOf(page)).not.toBe(lightInk);
 
   await page.getByRole('radio', { name: 'light' }).check();
   await expect.poll(ground).toBe(light);
-  await expect.poll(() => plate.innerHTML()).toBe(lightPlate);
+  await expect.poll(() => inkOf(page)).toBe(lightInk);
   await page.reload();
   await expect(page.getByRole('radio', { name: 'light' })).toBeChecked();
   await expect.poll(ground).toBe(light);
@@ -108,7 +110,7 @@ for (const [width, height] of [
   [1440, 900],
   [2560, 1440],
 ] as const) {
-  test(`at ${width}×${height} nothing is cut off: the page does not scroll and the plate is all in sight`, async ({
+  test(`at ${width}×${height} nothing is cut off: the page does not scroll and the stage is all in sight`, async ({
     page,
   }) => {
     await page.setViewportSize({ width, height });
@@ -117,13 +119,21 @@ for (const [width, height] of [
       return { x: scrollWidth - clientWidth, y: scrollHeight - clientHeight };
     });
     expect(overflow).toEqual({ x: 0, y: 0 });
-    const svg = await page.getByTestId('plate').locator('svg').boundingBox();
-    const sheet = await page.locator('#sheet').boundingBox();
-    if (svg === null || sheet === null) throw new Error('The plate or the sheet is not on the page.');
-    expect(svg.x).toBeGreaterThanOrEqual(sheet.x);
-    expect(svg.y).toBeGreaterThanOrEqual(sheet.y);
-    expect(svg.x + svg.width).toBeLessThanOrEqual(sheet.x + sheet.width);
-    expect(svg.y + svg.height).toBeLessThanOrEqual(sheet.y + sheet.height);
-    expect(svg.width / sheet.width + svg.height / sheet.height).toBeGreaterThan(0.8);
+    await expect.poll(() => isPainted(page)).toBe(true);
+    const { ink, sheet } = await inkBox(page);
+    // Between the ticks at the edges.
+    const ticks = 10;
+    expect(ink.left).toBeGreaterThan(ticks);
+    expect(ink.top).toBeGreaterThan(ticks);
+    expect(ink.right).toBeLessThan(sheet.width - ticks);
+    expect(ink.bottom).toBeLessThan(sheet.height - ticks);
+    // As large as there is room for, or at 100 %.
+    const percent = Number.parseInt(
+      await page.getByRole('button', { name: /back to 100 %/ }).innerText(),
+      10,
+    );
+    const room = (ink.right - ink.left) / sheet.width + (ink.bottom - ink.top) / sheet.height;
+    if (percent < 100) expect(room).toBeGreaterThan(0.8);
+    else expect(percent).toBe(100);
   });
 }
